@@ -41,14 +41,20 @@ public record CaseFile(
      * @param since when the habit was given up; null: not said
      * @param left the level that was given up, or -1: the level with the highest ratio
      */
-    public record BehaviourReport(int behaviour, int level, @Nullable PartialDate since, int left) {}
+    public record BehaviourReport(
+            int behaviour, int level, @Nullable PartialDate since, int left) {}
 
     /** What a source said about a condition, when ({@code on}), and since when the condition is there ({@code onset}). */
     public record Statement(
-            int condition, boolean present, int source, @Nullable PartialDate on, @Nullable PartialDate onset) {}
+            int condition,
+            boolean present,
+            int source,
+            @Nullable PartialDate on,
+            @Nullable PartialDate onset) {}
 
     /** A finding's level, and the day it speaks of; null: today. */
-    public record FindingReport(int finding, int level, @Nullable PartialDate on) {}
+    public record FindingReport(
+            int finding, int level, @Nullable PartialDate on) {}
 
     /** Occurrences of one type of event, and the window in which all of them are known; both ends or none. */
     public record History(
@@ -62,7 +68,11 @@ public record CaseFile(
     public record Occurrence(PartialDate on, int outcome) {}
 
     /** How the person died. */
-    public record Death(PartialDate on, Cause cause, int event, @Nullable PartialDate occurrence) {}
+    public record Death(
+            PartialDate on,
+            Cause cause,
+            int event,
+            @Nullable PartialDate occurrence) {}
 
     /** The cause of a death. */
     public enum Cause {
@@ -138,7 +148,8 @@ public record CaseFile(
     }
 
     /** The behaviour is at a level: always ({@code from} null), or from a day on. */
-    public record ChangedBehaviour(int behaviour, int level, @Nullable PartialDate from) implements Change {
+    public record ChangedBehaviour(
+            int behaviour, int level, @Nullable PartialDate from) implements Change {
         @Override
         public String kind() {
             return "behaviour";

@@ -21,7 +21,8 @@ public final class AgeCurve {
 
     private AgeCurve(Scale scale, double[] ages, List<Estimate> values) {
         if (ages.length == 0 || ages.length != values.size()) {
-            throw new IllegalArgumentException("ages and values must match, are " + ages.length + " and " + values.size());
+            throw new IllegalArgumentException(
+                    "ages and values must match, are " + ages.length + " and " + values.size());
         }
         this.scale = scale;
         this.ages = ages.clone();

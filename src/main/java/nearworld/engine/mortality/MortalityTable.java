@@ -73,7 +73,8 @@ public record MortalityTable(
     /** The column for a sex and (where the table is split) a level of smoking; null where the table has none. */
     public @Nullable Column column(Sex sex, @Nullable String smokingLevel) {
         for (Column c : columns) {
-            if (c.sex() == sex && (c.smokingLevels().isEmpty() || c.smokingLevels().contains(smokingLevel))) {
+            if (c.sex() == sex
+                    && (c.smokingLevels().isEmpty() || c.smokingLevels().contains(smokingLevel))) {
                 return c;
             }
         }

@@ -189,7 +189,9 @@ public record EvidencePack(
      * @param halfLifeYears null: it stays
      */
     public record AfterEffect(
-            @Nullable Estimate hazardRatio, @Nullable Estimate excessPerMille, @Nullable Estimate halfLifeYears) {}
+            @Nullable Estimate hazardRatio,
+            @Nullable Estimate excessPerMille,
+            @Nullable Estimate halfLifeYears) {}
 
     /**
      * A test, measurement or medicine.
@@ -200,7 +202,11 @@ public record EvidencePack(
      * @param days of waiting, null where none are given
      */
     public record Finding(
-            String id, List<Integer> of, List<FindingLevel> levels, @Nullable Double cost, @Nullable Double days) {
+            String id,
+            List<Integer> of,
+            List<FindingLevel> levels,
+            @Nullable Double cost,
+            @Nullable Double days) {
         public Finding {
             of = List.copyOf(of);
             levels = List.copyOf(levels);
@@ -251,7 +257,10 @@ public record EvidencePack(
     }
 
     /** What a source's sensitivity and specificity are for one condition; null: the source's own. */
-    public record SourceOverride(int condition, @Nullable Estimate sensitivity, @Nullable Estimate specificity) {}
+    public record SourceOverride(
+            int condition,
+            @Nullable Estimate sensitivity,
+            @Nullable Estimate specificity) {}
 
     /**
      * A treatment: a ratio at the pivot.
