@@ -83,14 +83,15 @@ public record EvidencePack(
      *
      * @param share of the population at this level, by sex and age
      * @param hazardRatio the level's own ratio (of those who gave up, whenever: their average)
-     * @param longRun the ratio that a person who changes to this level tends to; null: the level's own
+     * @param longRun the ratio that a person who changes to this level tends to (its own {@code atAge}, by default the
+     *     pivot); null: the level's own
      * @param halfLifeYears in which the log ratio moves halfway there; null: no half-life
      */
     public record Level(
             String id,
             BySex<AgeCurve> share,
             Ratio hazardRatio,
-            @Nullable Estimate longRun,
+            @Nullable Ratio longRun,
             @Nullable Estimate halfLifeYears) {}
 
     /** A hidden condition, present or absent. Links name parents: conditions, or levels of behaviours. */
