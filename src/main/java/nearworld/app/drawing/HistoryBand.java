@@ -87,7 +87,9 @@ final class HistoryBand {
 
     private void title(Svg svg, Row row) {
         double room = format.wordsBeside() ? format.left() - 16 : format.right() - format.textLeft();
-        int count = row.lane() == null ? lifeline.flags().size() : row.lane().marks().size();
+        int count = row.lane() == null
+                ? lifeline.flags().size()
+                : row.lane().marks().size();
         String counted = row.title() + (count > row.labels().size() ? " · " + count : "");
         String fitted = Lettering.fit(counted, TITLE_SIZE, room);
         if (format.wordsBeside()) {
@@ -111,7 +113,13 @@ final class HistoryBand {
     private void leaders(Svg svg, Row row) {
         for (LabelStack.Placed label : row.labels()) {
             if (label.level() > 0) {
-                svg.line(label.x(), row.y() + row.swarm().offset(label.x()), label.x(), labelY(row, label) + 2, Ink.CONTRAST, 0.8);
+                svg.line(
+                        label.x(),
+                        row.y() + row.swarm().offset(label.x()),
+                        label.x(),
+                        labelY(row, label) + 2,
+                        Ink.CONTRAST,
+                        0.8);
             }
         }
     }

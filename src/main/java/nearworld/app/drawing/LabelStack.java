@@ -43,7 +43,8 @@ final class LabelStack {
         double from = Math.min(wish.x() - 3, right - width);
         for (int level = 0; level < levels; level++) {
             Placed candidate = new Placed(wish.x(), from, from + width, level, wish.words());
-            Optional<Placed> hindrance = placed.stream().filter(p -> collide(p, candidate)).findFirst();
+            Optional<Placed> hindrance =
+                    placed.stream().filter(p -> collide(p, candidate)).findFirst();
             if (hindrance.isEmpty()) {
                 placed.add(candidate);
                 return;

@@ -48,7 +48,11 @@ public record Lifeline(
      * @param from first day of the watched window, null where none is recorded
      * @param to its last day
      */
-    public record Lane(String title, @Nullable LocalDate from, @Nullable LocalDate to, List<Mark> marks) {
+    public record Lane(
+            String title,
+            @Nullable LocalDate from,
+            @Nullable LocalDate to,
+            List<Mark> marks) {
         public Lane {
             marks = List.copyOf(marks);
             if ((from == null) != (to == null)) {

@@ -24,7 +24,12 @@ public final class LifelineDrawing {
         Legend legend = new Legend(lifeline, format, svg);
         double axis = worlds.bottom() + 4;
         Lifeline.Words words = lifeline.words();
-        svg.open("lifeline-" + format.key(), format.width(), axis + AXIS + legend.height() + 6, words.title(), words.description());
+        svg.open(
+                "lifeline-" + format.key(),
+                format.width(),
+                axis + AXIS + legend.height() + 6,
+                words.title(),
+                words.description());
         ticks(svg, lifeline, format, time, axis);
         svg.line(time.today(), HEAD - 12, time.today(), axis, Ink.TEXT, 1.3);
         today(svg, words.today(), format, time.today());
@@ -45,7 +50,9 @@ public final class LifelineDrawing {
         int step = step(format, time);
         LocalDate first = time.firstDay();
         String prefix = format.wordsBeside() ? "" : lifeline.words().age() + " ";
-        for (int year = Math.floorDiv(first.getYear(), step) * step; year <= time.lastDay().getYear(); year += step) {
+        for (int year = Math.floorDiv(first.getYear(), step) * step;
+                year <= time.lastDay().getYear();
+                year += step) {
             LocalDate day = LocalDate.of(year, 1, 1);
             if (!day.isBefore(first) && !day.isAfter(time.lastDay())) {
                 tick(svg, time.x(day), axis, year, prefix + age(lifeline, day));

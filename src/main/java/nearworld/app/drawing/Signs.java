@@ -18,8 +18,8 @@ final class Signs {
     }
 
     static void flag(Svg svg, double x, double y) {
-        svg.line(x, y - 8, x, y + 8, Ink.TEXT, 1.5);
-        polygon(svg, x, y, 0, -8, 11, -4.5, 0, -1);
+        polygon(svg, x, y, 0, -7.5, 11, -4, 0, -0.5);
+        svg.line(x, y - 7.5, x, y + 8, Ink.TEXT, 1.5);
     }
 
     private static void polygon(Svg svg, double x, double y, double... offsets) {

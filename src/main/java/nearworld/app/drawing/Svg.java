@@ -7,13 +7,40 @@ final class Svg {
     /** Opens the drawing, named by its title and described by its description. */
     Svg open(String idPrefix, double width, double height, String title, String description) {
         out.append("<svg xmlns=\"http://www.w3.org/2000/svg\" class=\"nw-drawing\" role=\"img\" viewBox=\"0 0 ")
-                .append(n(width)).append(' ').append(n(height))
-                .append("\" width=\"").append(n(width)).append("\" height=\"").append(n(height))
+                .append(n(width))
+                .append(' ')
+                .append(n(height))
+                .append("\" width=\"")
+                .append(n(width))
+                .append("\" height=\"")
+                .append(n(height))
                 .append("\" font-family=\"Helvetica, Arial, sans-serif\" aria-labelledby=\"")
-                .append(idPrefix).append("-title ").append(idPrefix).append("-desc\">\n<title id=\"")
-                .append(idPrefix).append("-title\">").append(escape(title)).append("</title>\n<desc id=\"")
-                .append(idPrefix).append("-desc\">").append(escape(description)).append("</desc>\n");
+                .append(idPrefix)
+                .append("-title ")
+                .append(idPrefix)
+                .append("-desc\">\n<title id=\"")
+                .append(idPrefix)
+                .append("-title\">")
+                .append(escape(title))
+                .append("</title>\n<desc id=\"")
+                .append(idPrefix)
+                .append("-desc\">")
+                .append(escape(description))
+                .append("</desc>\n");
         return this;
+    }
+
+    /** Opens a drawing that only repeats what stands beside it. */
+    void openSilent(double width, double height) {
+        out.append("<svg xmlns=\"http://www.w3.org/2000/svg\" class=\"nw-small\" aria-hidden=\"true\" viewBox=\"0 0 ")
+                .append(n(width))
+                .append(' ')
+                .append(n(height))
+                .append("\" width=\"")
+                .append(n(width))
+                .append("\" height=\"")
+                .append(n(height))
+                .append("\">\n");
     }
 
     String close() {
@@ -21,16 +48,35 @@ final class Svg {
     }
 
     void rect(double x, double y, double width, double height, Ink fill) {
-        element("rect").a("x", x).a("y", y).a("width", Math.max(0, width)).a("height", height).fill(fill).end();
+        element("rect")
+                .a("x", x)
+                .a("y", y)
+                .a("width", Math.max(0, width))
+                .a("height", height)
+                .fill(fill)
+                .end();
     }
 
     /** A patch of paper behind a text, so that lines under it do not run through its letters. */
     void patch(double x, double y, double width, double height, Ink paper) {
-        element("rect").a("x", x).a("y", y).a("width", width).a("height", height).fill(paper).a("opacity", "0.86").end();
+        element("rect")
+                .a("x", x)
+                .a("y", y)
+                .a("width", width)
+                .a("height", height)
+                .fill(paper)
+                .a("opacity", "0.86")
+                .end();
     }
 
     void line(double x1, double y1, double x2, double y2, Ink ink, double width) {
-        element("line").a("x1", x1).a("y1", y1).a("x2", x2).a("y2", y2).stroke(ink, width).end();
+        element("line")
+                .a("x1", x1)
+                .a("y1", y1)
+                .a("x2", x2)
+                .a("y2", y2)
+                .stroke(ink, width)
+                .end();
     }
 
     void fill(String path, Ink ink) {
@@ -48,7 +94,13 @@ final class Svg {
     }
 
     void circle(double x, double y, double radius, Ink fill, Ink stroke, double width) {
-        element("circle").a("cx", x).a("cy", y).a("r", radius).fill(fill).stroke(stroke, width).end();
+        element("circle")
+                .a("cx", x)
+                .a("cy", y)
+                .a("r", radius)
+                .fill(fill)
+                .stroke(stroke, width)
+                .end();
     }
 
     /** @param anchor start, middle or end */

@@ -35,7 +35,10 @@ final class TimeScale {
                 .mapToDouble(day -> years(lifeline.today(), day))
                 .min()
                 .orElse(0);
-        double end = lifeline.strips().stream().mapToDouble(s -> lastYears(s.monthly())).max().orElseThrow();
+        double end = lifeline.strips().stream()
+                .mapToDouble(s -> lastYears(s.monthly()))
+                .max()
+                .orElseThrow();
         double past = Math.max(LEAST_PAST_YEARS, -first * 1.03 + 0.4);
         return new TimeScale(lifeline.today(), -past, end, format.left(), format.right());
     }

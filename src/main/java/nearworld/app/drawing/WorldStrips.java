@@ -30,9 +30,11 @@ final class WorldStrips {
         int count = lifeline.strips().size();
         this.inkHeight = count <= FEW ? 50 : 40;
         this.pitch = inkHeight + (format.wordsBeside() ? 26 : 54);
-        this.densities =
-                lifeline.strips().stream().map(s -> new DeathDensity(s.monthly())).toList();
-        double highest = densities.stream().mapToDouble(DeathDensity::peak).max().orElseThrow();
+        this.densities = lifeline.strips().stream()
+                .map(s -> new DeathDensity(s.monthly()))
+                .toList();
+        double highest =
+                densities.stream().mapToDouble(DeathDensity::peak).max().orElseThrow();
         double cap = densities.get(0).peak() * CUT_AT_TABLE_PEAKS;
         this.unitsPerDensity = inkHeight / Math.max(Math.min(highest, cap), 1e-9);
     }
@@ -77,7 +79,9 @@ final class WorldStrips {
         if (parting > 0) {
             svg.fill(area(recorded(), base, 0, parting), Ink.CONTRAST);
         }
-        svg.fill(area(i, base, Math.max(0, parting), Double.MAX_VALUE), strip.kind().ink());
+        svg.fill(
+                area(i, base, Math.max(0, parting), Double.MAX_VALUE),
+                strip.kind().ink());
     }
 
     private double partingYears(Lifeline.Strip strip) {
@@ -95,7 +99,10 @@ final class WorldStrips {
     private String outline(int i, double base, double fromYears) {
         StringBuilder path = new StringBuilder();
         for (double[] p : points(i, base, fromYears, Double.MAX_VALUE)) {
-            path.append(path.isEmpty() ? 'M' : 'L').append(Svg.n(p[0])).append(' ').append(Svg.n(p[1]));
+            path.append(path.isEmpty() ? 'M' : 'L')
+                    .append(Svg.n(p[0]))
+                    .append(' ')
+                    .append(Svg.n(p[1]));
         }
         return path.toString();
     }
@@ -132,7 +139,9 @@ final class WorldStrips {
 
     private void spread(Svg svg, Lifeline.Strip strip, double y) {
         Lifeline.Spread s = strip.spread();
-        Ink ink = strip.kind() == Lifeline.Kind.TABLE ? Ink.CONTRAST : strip.kind().ink();
+        Ink ink = strip.kind() == Lifeline.Kind.TABLE
+                ? Ink.CONTRAST
+                : strip.kind().ink();
         svg.line(time.xAfter(s.tenth()), y, time.xAfter(s.nineTenths()), y, ink, 1.6);
         double quarter = time.xAfter(s.quarter());
         svg.rect(quarter, y - 2.5, time.xAfter(s.threeQuarters()) - quarter, 5, ink);
@@ -149,7 +158,13 @@ final class WorldStrips {
                 double y = base - 15 - (lines.size() - 1 - i) * 15;
                 svg.text(format.textLeft(), y, TITLE_SIZE, Ink.TEXT, "start", lines.get(i), true);
             }
-            svg.text(format.textLeft(), base + 1, NOTE_SIZE, Ink.MUTED, "start", Lettering.fit(strip.note(), NOTE_SIZE, room));
+            svg.text(
+                    format.textLeft(),
+                    base + 1,
+                    NOTE_SIZE,
+                    Ink.MUTED,
+                    "start",
+                    Lettering.fit(strip.note(), NOTE_SIZE, room));
             svg.text(format.width() - 6, base - 15, 16, Ink.TEXT, "end", strip.figure(), true);
             svg.text(format.width() - 6, base + 1, NOTE_SIZE, Ink.MUTED, "end", strip.figureNote());
             return;
