@@ -39,13 +39,13 @@ class ApplicationRoleGuard implements SmartInitializingSingleton {
             refuse(answer.getBoolean("owner"), role, "owns the tables or is a member of the role that does");
             refuse(!answer.getBoolean("granted"), role, "is neither nearworld_app nor a member of it");
         } catch (SQLException e) {
-            throw new IllegalStateException("The rights of the application's database role cannot be read", e);
+            throw new DatabaseRefusedException("The rights of the application's database role cannot be read", e);
         }
     }
 
     private static void refuse(boolean wrong, String role, String what) {
         if (wrong) {
-            throw new IllegalStateException("The application's database role \"" + role + "\" " + what
+            throw new DatabaseRefusedException("The application's database role \"" + role + "\" " + what
                     + "; NEARWORLD_DATABASE_APP_USER must name a role that is only a member of nearworld_app.");
         }
     }

@@ -27,7 +27,7 @@ record DatabaseSettings(
             return Optional.empty();
         }
         if (!url.startsWith("jdbc:postgresql:")) {
-            throw new IllegalStateException(
+            throw new DatabaseRefusedException(
                     "NEARWORLD_DATABASE_URL must start with jdbc:postgresql:, was \"" + url + "\"");
         }
         return Optional.of(new ExternalDatabase(
@@ -40,7 +40,7 @@ record DatabaseSettings(
 
     private static String required(@Nullable String value, String variable) {
         if (value == null || value.isBlank()) {
-            throw new IllegalStateException(variable + " must be set when NEARWORLD_DATABASE_URL is set");
+            throw new DatabaseRefusedException(variable + " must be set when NEARWORLD_DATABASE_URL is set");
         }
         return value;
     }

@@ -90,26 +90,33 @@ final class EmbeddedDatabase implements Database {
     private static EmbeddedPostgres start(DataFolder folder, Path files) throws IOException {
         Path password = folder.secretFile("database-superuser");
         if (!Files.exists(password)) {
-            throw new IOException("The database in " + files + " lacks its password file " + password
+            throw new DatabaseRefusedException("The database in " + files + " lacks its password file " + password
                     + "; restore it from a backup.");
         }
         OrphanedServer.stop(files);
         Path binaries = folder.create("postgres-binaries");
         // The library passes -F (no fsync): what was confirmed must survive a power cut, so durability is set back.
-        return builder(files, binaries, password)
+        EmbeddedPostgres.Builder builder = builder(files, binaries, password)
                 .setCleanDataDirectory(false)
                 .setRegisterShutdownHook(false)
                 .setServerConfig("max_connections", "50")
                 .setServerConfig("fsync", "on")
                 .setServerConfig("synchronous_commit", "on")
-                .setServerConfig("full_page_writes", "on")
-                .start();
+                .setServerConfig("full_page_writes", "on");
+        try {
+            return builder.start();
+        } catch (IOException | IllegalStateException e) {
+            throw new DatabaseRefusedException(
+                    "The embedded PostgreSQL server does not start: " + e.getMessage()
+                            + ". NEARWORLD_DATABASE_URL and its companions lead to a server of your own instead.",
+                    e);
+        }
     }
 
     private static void requireSameMajorVersion(Path files) throws IOException {
         String version = Files.readString(files.resolve("PG_VERSION")).strip();
         if (!version.equals(MAJOR_VERSION)) {
-            throw new IOException("The database in " + files + " is of PostgreSQL " + version
+            throw new DatabaseRefusedException("The database in " + files + " is of PostgreSQL " + version
                     + ", this application brings PostgreSQL " + MAJOR_VERSION + "; dump and restore it.");
         }
     }
@@ -122,7 +129,7 @@ final class EmbeddedDatabase implements Database {
             roles.createDatabase(DATABASE);
         } catch (SQLException e) {
             server.close();
-            throw new IOException("The roles of the embedded database cannot be prepared", e);
+            throw new DatabaseRefusedException("The roles of the embedded database cannot be prepared", e);
         }
     }
 

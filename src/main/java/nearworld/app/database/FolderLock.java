@@ -28,7 +28,7 @@ final class FolderLock {
                 FileChannel.open(folder.resolve("nearworld.lock"), StandardOpenOption.CREATE, StandardOpenOption.WRITE);
         if (tryLock(channel) == null) {
             channel.close();
-            throw new IOException("Another Nearworld is running on the data folder " + folder
+            throw new DatabaseRefusedException("Another Nearworld is running on the data folder " + folder
                     + "; stop it, or set NEARWORLD_DATA to another folder.");
         }
         return new FolderLock(channel);

@@ -40,11 +40,12 @@ final class OrphanedServer {
         }
     }
 
-    private static long parsePid(String line) throws IOException {
+    private static long parsePid(String line) {
         try {
             return Long.parseLong(line.strip());
         } catch (NumberFormatException e) {
-            throw new IOException("postmaster.pid must start with a process number, was \"" + line + "\"", e);
+            throw new DatabaseRefusedException(
+                    "postmaster.pid must start with a process number, was \"" + line + "\"", e);
         }
     }
 
@@ -65,7 +66,7 @@ final class OrphanedServer {
             Thread.currentThread().interrupt();
             throw new IOException("Interrupted while stopping process " + process.pid(), e);
         } catch (ExecutionException | TimeoutException e) {
-            throw new IOException(
+            throw new DatabaseRefusedException(
                     "The PostgreSQL server of an earlier run, process " + process.pid()
                             + ", does not stop; stop it by hand.",
                     e);

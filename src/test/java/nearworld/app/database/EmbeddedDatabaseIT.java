@@ -136,7 +136,7 @@ class EmbeddedDatabaseIT {
         DataFolder folder = folderWithBinaries(temp);
         try (EmbeddedDatabase database = EmbeddedDatabase.open(folder)) {
             assertThatThrownBy(() -> EmbeddedDatabase.open(folder))
-                    .isInstanceOf(IOException.class)
+                    .isInstanceOf(DatabaseRefusedException.class)
                     .hasMessageContaining("Another Nearworld is running")
                     .hasMessageContaining(temp.toString());
             assertThat(ask(database.url(), database.owner(), "select 1")).isEqualTo("1");
@@ -149,7 +149,7 @@ class EmbeddedDatabaseIT {
         Path files = Files.createDirectories(folder.path().resolve("postgres"));
         Files.writeString(files.resolve("PG_VERSION"), "16\n");
         assertThatThrownBy(() -> EmbeddedDatabase.open(folder))
-                .isInstanceOf(IOException.class)
+                .isInstanceOf(DatabaseRefusedException.class)
                 .hasMessageContaining("PostgreSQL 16")
                 .hasMessageContaining("PostgreSQL 17");
     }
@@ -160,7 +160,7 @@ class EmbeddedDatabaseIT {
         EmbeddedDatabase.open(folder).close();
         Files.delete(folder.secretFile("database-superuser"));
         assertThatThrownBy(() -> EmbeddedDatabase.open(folder))
-                .isInstanceOf(IOException.class)
+                .isInstanceOf(DatabaseRefusedException.class)
                 .hasMessageContaining("database-superuser");
     }
 
