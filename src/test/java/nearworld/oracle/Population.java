@@ -254,12 +254,8 @@ final class Population {
     /** Probability that what is there at the assessment was there at this age, where nothing dates it. */
     double omega(int i, double atAge) {
         Condition condition = pack.conditions.get(i);
-        return atAge >= age
-                ? 1
-                : Math.min(
-                        1,
-                        condition.prevalence().value(atAge)
-                                / condition.prevalence().value(age));
+        return Math.min(
+                1, condition.prevalence().value(atAge) / condition.prevalence().value(age));
     }
 
     /** How far each condition of a mask counts at an age, in the population. */

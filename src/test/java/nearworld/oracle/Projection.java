@@ -125,11 +125,11 @@ final class Projection {
     private double habit(int k, int level, double atAge) {
         List<Level> levels = population.pack.behaviours.get(k).levels();
         for (NewHabit habit : whatIf.newHabits) {
-            Level towards = levels.get(habit.level());
-            if (habit.behaviour() == k
-                    && atAge >= habit.fromAge()
-                    && levels.get(level).ratio() > towards.ratio()) {
-                return Person.fade(own(k, level, habit.fromAge()), towards, atAge - habit.fromAge());
+            if (habit.behaviour() == k && atAge >= habit.fromAge()) {
+                Level towards = levels.get(habit.level());
+                if (levels.get(level).ratio() > towards.ratio()) {
+                    return Person.fade(own(k, level, habit.fromAge()), towards, atAge - habit.fromAge());
+                }
             }
         }
         return own(k, level, atAge);
