@@ -90,6 +90,45 @@ public final class LifeTable {
         return Math.floor(age - shift - firstAge + 1) + shift + firstAge;
     }
 
+    /**
+     * The complete expectation of remaining life at an exact age, in years: ∫ S0 to ω, each year of age in closed form.
+     *
+     * @param age within {@link #firstAge()} and ω
+     */
+    public double expectation(double age) {
+        double sum = 0;
+        double reached = 1;
+        double a = age;
+        while (a < omega()) {
+            double next = Math.min(nextBreak(a), omega());
+            sum += reached * livedBetween(a, next);
+            reached *= StrictMath.exp(cumulativeHazard(a) - cumulativeHazard(next));
+            a = next;
+        }
+        return sum;
+    }
+
+    /** Years lived between two ages of the same year of age by somebody alive at the first. */
+    private double livedBetween(double from, double to) {
+        double a = from - shift - firstAge;
+        int year = (int) Math.floor(a + 1e-12);
+        double rate = q[year];
+        double s = Math.max(0, a - year);
+        double end = s + (to - from);
+        if (rate == 0) {
+            return to - from;
+        }
+        if (rate == 1 || withinYear == WithinYear.UNIFORM) {
+            return ((end - s) - rate * (end * end - s * s) / 2) / (1 - s * rate);
+        }
+        if (withinYear == WithinYear.BALDUCCI) {
+            double start = 1 - (1 - s) * rate;
+            return StrictMath.log((1 - (1 - end) * rate) / start) / rate * start;
+        }
+        double force = -StrictMath.log1p(-rate);
+        return -StrictMath.expm1(-force * (end - s)) / force;
+    }
+
     /** S0: the probability that a life of age {@code from} reaches age {@code to}; 0 beyond ω. */
     public double survival(double from, double to) {
         if (to >= omega()) {

@@ -1,0 +1,256 @@
+package nearworld.engine.counterfactual;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
+import java.util.TreeSet;
+import nearworld.engine.inference.Baseline;
+import nearworld.engine.inference.ConditionStates;
+import nearworld.engine.inference.Evidence;
+import nearworld.engine.inference.EvidenceFactors;
+import nearworld.engine.inference.Factor;
+import nearworld.engine.inference.HiddenStates;
+import nearworld.engine.inference.Person;
+import nearworld.engine.inference.Posterior;
+import nearworld.engine.inference.ScoreMeasure;
+import nearworld.engine.network.EvidencePack.ConditionFactor;
+import nearworld.engine.network.EvidencePack.Outcome;
+import org.jspecify.annotations.Nullable;
+
+/** The worlds of a living person: who the people in them are today, and how long they live from there. */
+public final class Worlds {
+    private final Person person;
+    private final Posterior posterior;
+
+    public Worlds(Person person, Posterior posterior) {
+        this.person = person;
+        this.posterior = posterior;
+    }
+
+    /** The table itself. */
+    public WorldCurve table() {
+        Baseline baseline = person.baseline();
+        List<Double> survival = new ArrayList<>();
+        double lived = 0;
+        for (int k = 0; k < baseline.months(); k++) {
+            double s = baseline.tableSurvival(k);
+            survival.add(s);
+            double hazard = Double.isInfinite(baseline.hazard(k)) ? Double.NaN : baseline.tableHazard(k);
+            lived += s * baseline.length(k) * (Double.isNaN(hazard) ? 0.5 : -expm1OverMinus(hazard));
+        }
+        survival.add(0.0);
+        return new WorldCurve(survival, lived, 1, false);
+    }
+
+    private static double expm1OverMinus(double hazard) {
+        return hazard < 1e-8 ? -1 + hazard / 2 : StrictMath.expm1(-hazard) / hazard;
+    }
+
+    /** The posterior with all after-effects and switches on. */
+    public WorldCurve recorded() {
+        return run(posteriorStrands(true));
+    }
+
+    /** The posterior with no after-effects and all switches off. */
+    public WorldCurve eventsRemoved() {
+        return run(posteriorStrands(false));
+    }
+
+    private WorldCurve run(Strands strands) {
+        Habits habits = new Habits(
+                person.pack(), person.scores(), person.evidence(), habits(person.evidence(), null), Map.of());
+        return new Future(person, WhatIfPlan.none(""), habits, strands).run(1, false);
+    }
+
+    private Strands posteriorStrands(boolean withEvents) {
+        Strands strands = new Strands(person.baseline().grid());
+        List<Effect> effects = withEvents ? recordedEffects() : List.of();
+        posterior.hidden().forEach((s, measure) -> {
+            if (!person.aftermath().isNeutral()) {
+                measure.multiply(Posterior.aftermath(person, posterior.states(), posterior.rows(), s));
+            }
+            add(strands, posterior.states(), posterior.rows(), s, measure, withEvents, effects);
+        });
+        strands.trim();
+        return strands;
+    }
+
+    private void add(
+            Strands strands,
+            ConditionStates states,
+            long told,
+            int[] s,
+            ScoreMeasure measure,
+            boolean withEvents,
+            List<Effect> effects) {
+        long before = 0;
+        long present = 0;
+        for (int i = 0; i < person.pack().conditions().size(); i++) {
+            if ((told >> i & 1) != 0) {
+                int state = s[person.prior().conditionVariable(i)];
+                boolean was = states.before(i, state);
+                before |= was ? 1L << i : 0;
+                present |= was || (withEvents && states.switches(i, state) != 0) ? 1L << i : 0;
+            }
+        }
+        double shift = person.scores().of(present) - person.scores().of(before);
+        strands.at(new Strands.Key(present & person.withExcess(), 0, effects)).addShifted(measure, shift, 1);
+    }
+
+    private List<Effect> recordedEffects() {
+        List<Effect> effects = new ArrayList<>();
+        for (Evidence.Occurrence o : person.evidence().occurrences()) {
+            Outcome outcome = person.pack().events().get(o.event()).outcomes().get(o.outcome());
+            @Nullable Effect effect =
+                    Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay()));
+            if (effect != null) {
+                effects.add(effect);
+            }
+        }
+        return effects;
+    }
+
+    /** The prior with after-effects and switches on: what learns nothing from the history. */
+    public WorldCurve unlearned() {
+        ConditionStates states = posterior.states();
+        EvidenceFactors prior =
+                new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), false);
+        Strands strands = new Strands(person.baseline().grid());
+        List<Effect> effects = recordedEffects();
+        new HiddenStates(
+                        prior.factors(),
+                        person.scores().terms(person.prior(), states, prior.cards()),
+                        prior.cards(),
+                        person.baseline().grid(),
+                        person.variables(posterior.rows()),
+                        person.variables(~posterior.rows()))
+                .forEach((s, measure) -> add(strands, states, posterior.rows(), s, measure, true, effects));
+        strands.trim();
+        Habits none = new Habits(person.pack(), person.scores(), person.evidence(), List.of(), Map.of());
+        return new Future(person, WhatIfPlan.none(""), none, strands).run(1, false);
+    }
+
+    /** A what-if: the posterior carried over by the twin network and by thinning, then lived on. */
+    public WorldCurve whatIf(WhatIfPlan asked) {
+        WhatIfPlan plan = effective(asked);
+        boolean undoes = plan.removed() != 0 || plan.never() != 0 || !plan.always().isEmpty();
+        ConditionStates states =
+                new ConditionStates(person.pack(), person.evidence().occurrences(), undoes);
+        EvidenceFactors evidence =
+                new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), true);
+        TwinNetwork twin = new TwinNetwork(person, plan, states, evidence);
+        Thinning thinning = new Thinning(person, plan, states, evidence, twin);
+        long tracked = Future.tracked(person, plan);
+        long told = told(plan, tracked);
+        TreeSet<Integer> outer = person.variables(told);
+        for (int v : twin.variables()) {
+            outer.add(v);
+        }
+        outer.addAll(plan.always().keySet());
+        outer.addAll(plan.habits().keySet());
+        TreeSet<Integer> loose = person.variables(~told);
+        loose.removeAll(evidence.coupled());
+        List<Factor> factors = new ArrayList<>(evidence.factors());
+        factors.addAll(twin.factors());
+        HiddenStates hidden = new HiddenStates(
+                factors,
+                person.scores().terms(person.prior(), states, twin.cards()),
+                twin.cards(),
+                person.baseline().grid(),
+                outer,
+                loose);
+        Map<Integer, Habits.Change> changes = new TreeMap<>();
+        plan.habits().forEach((b, h) -> changes.put(b, new Habits.Change(h.level(), h.from())));
+        Habits habits = new Habits(
+                person.pack(), person.scores(), person.evidence(), habits(person.evidence(), plan), changes);
+        Strands strands = new Strands(person.baseline().grid());
+        hidden.forEach((s, measure) -> {
+            if (!person.aftermath().isNeutral()) {
+                measure.multiply(Posterior.aftermath(person, states, told, s));
+            }
+            place(strands, plan, states, twin, thinning, habits, told, tracked, s, measure);
+        });
+        strands.trim();
+        double alive = strands.total() / posterior.mass();
+        return new Future(person, plan, habits, strands).run(alive, thinning.newOccurrences());
+    }
+
+    private void place(
+            Strands strands,
+            WhatIfPlan plan,
+            ConditionStates states,
+            TwinNetwork twin,
+            Thinning thinning,
+            Habits habits,
+            long told,
+            long tracked,
+            int[] s,
+            ScoreMeasure measure) {
+        double levels = 0;
+        for (Map.Entry<Integer, Integer> b : new TreeMap<>(plan.always()).entrySet()) {
+            levels += person.scores().level(b.getKey(), b.getValue())
+                    - person.scores().level(b.getKey(), s[b.getKey()]);
+        }
+        long before = 0;
+        for (int i = 0; i < person.pack().conditions().size(); i++) {
+            boolean was =
+                    (told >> i & 1) != 0 && states.before(i, s[person.prior().conditionVariable(i)]);
+            before |= was ? 1L << i : 0;
+        }
+        for (Thinning.Course course : thinning.courses(s)) {
+            long present = 0;
+            for (int i = 0; i < person.pack().conditions().size(); i++) {
+                if ((told >> i & 1) != 0 && (plan.never() >> i & 1) == 0) {
+                    int state = s[person.prior().conditionVariable(i)];
+                    boolean on = (states.switches(i, state) & course.kept()) != 0;
+                    present |= on || twin.before(i, s) ? 1L << i : 0;
+                }
+            }
+            double shift = levels + person.scores().of(present) - person.scores().of(before);
+            strands.at(new Strands.Key(present & tracked, habits.key(s), course.effects()))
+                    .addShifted(measure, shift, course.probability());
+        }
+    }
+
+    /** The conditions whose states a what-if must tell apart. */
+    private long told(WhatIfPlan plan, long tracked) {
+        long differing = person.mayBeBroughtOn() | TwinNetwork.affected(person, plan) | plan.never();
+        long told = person.scores().withPartners(differing) | tracked | person.withExcess();
+        for (Evidence.Occurrence o : person.evidence().occurrences()) {
+            long odds = 0;
+            for (Outcome outcome : person.pack().events().get(o.event()).outcomes()) {
+                for (ConditionFactor r : outcome.oddsRatios()) {
+                    odds |= 1L << r.condition();
+                }
+            }
+            told |= (odds & differing) != 0 ? odds : 0;
+        }
+        return told;
+    }
+
+    /** An undated change to the level that is recorded changes nothing. */
+    private WhatIfPlan effective(WhatIfPlan plan) {
+        Map<Integer, Integer> always = new TreeMap<>(plan.always());
+        always.entrySet()
+                .removeIf(b -> person.evidence().levels().get(b.getKey()).equals(b.getValue()));
+        return new WhatIfPlan(
+                plan.name(),
+                plan.removed(),
+                plan.outcomes(),
+                plan.moved(),
+                plan.never(),
+                plan.cured(),
+                always,
+                plan.habits(),
+                plan.treatments(),
+                plan.added());
+    }
+
+    /** The habits given up that a world still knows: not those of behaviours that have always been at a level. */
+    private static List<Evidence.GivenUp> habits(Evidence evidence, @Nullable WhatIfPlan plan) {
+        return evidence.habits().stream()
+                .filter(h -> plan == null || !plan.always().containsKey(h.behaviour()))
+                .toList();
+    }
+}
