@@ -71,8 +71,9 @@ public final class Assessor {
         if (smoking >= 0 && level < 0) {
             return refused(Fault.of("smokingUnknown", "$.applicant.behaviours"));
         }
-        String levelId =
-                level < 0 ? null : pack.behaviours().get(smoking).levels().get(level).id();
+        String levelId = level < 0
+                ? null
+                : pack.behaviours().get(smoking).levels().get(level).id();
         MortalityTable.Column column = table.column(file.sex(), levelId);
         if (column == null) {
             return refused(Fault.of(
@@ -124,8 +125,7 @@ public final class Assessor {
         for (int w = 0; w < plans.size(); w++) {
             for (WhatIfPlan.Added a : plans.get(w).added()) {
                 if (a.at() >= end) {
-                    faults.add(Fault.of(
-                            "eventAfterTable", "$.whatIfs[" + w + "]", "years", a.at(), "highest", end));
+                    faults.add(Fault.of("eventAfterTable", "$.whatIfs[" + w + "]", "years", a.at(), "highest", end));
                 }
             }
         }
@@ -177,8 +177,7 @@ public final class Assessor {
 
     private void addTableWarnings(List<Fault> warnings, Person person) {
         if (!table.population().equals(pack.population())) {
-            warnings.add(
-                    Fault.of("populationMismatch", "$", "table", table.population(), "pack", pack.population()));
+            warnings.add(Fault.of("populationMismatch", "$", "table", table.population(), "pack", pack.population()));
         }
         if (person.baseline().table().isExtended()) {
             warnings.add(Fault.of("tableExtended", "$", "lastAge", LifeTable.LAST_AGE));
@@ -186,8 +185,7 @@ public final class Assessor {
     }
 
     /** For each partial date of the recorded history: the headline numbers at both ends of its period. */
-    private void addPartialDateWarnings(
-            List<Fault> warnings, CaseFile file, CaseResolver resolver) {
+    private void addPartialDateWarnings(List<Fault> warnings, CaseFile file, CaseResolver resolver) {
         for (Map.Entry<String, PartialDate> date : resolver.partialDates().entrySet()) {
             WorldResult early = variant(file, date.getKey(), date.getValue().earliest());
             WorldResult late = variant(file, date.getKey(), date.getValue().latest());
@@ -219,8 +217,7 @@ public final class Assessor {
         Worlds worlds = new Worlds(person, posterior);
         String whatIfs = "$.whatIfs[";
         WorldCurve curve = path.startsWith(whatIfs)
-                ? worlds.whatIf(resolver.plan(
-                        Integer.parseInt(path.substring(whatIfs.length(), path.indexOf(']')))))
+                ? worlds.whatIf(resolver.plan(Integer.parseInt(path.substring(whatIfs.length(), path.indexOf(']')))))
                 : worlds.recorded();
         Headline own = new Headline(
                 person.baseline().table(),

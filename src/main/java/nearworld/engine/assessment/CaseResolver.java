@@ -78,7 +78,8 @@ final class CaseResolver {
 
     private Evidence resolve() {
         long today = file.assessedOn().toEpochDay();
-        List<Integer> levels = new ArrayList<>(java.util.Collections.nCopies(pack.behaviours().size(), -1));
+        List<Integer> levels =
+                new ArrayList<>(java.util.Collections.nCopies(pack.behaviours().size(), -1));
         List<Evidence.GivenUp> habits = new ArrayList<>();
         Scores scores = new Scores(pack);
         for (CaseFile.BehaviourReport b : file.behaviours()) {
@@ -92,8 +93,8 @@ final class CaseResolver {
                 habits.add(new Evidence.GivenUp(b.behaviour(), since, left));
             }
         }
-        List<Long> onsets = new ArrayList<>(
-                java.util.Collections.nCopies(pack.conditions().size(), Evidence.NO_DAY));
+        List<Long> onsets =
+                new ArrayList<>(java.util.Collections.nCopies(pack.conditions().size(), Evidence.NO_DAY));
         List<Evidence.Said> said = new ArrayList<>();
         for (int i = 0; i < file.statements().size(); i++) {
             said.add(said(file.statements().get(i), "$.statements[" + i + "]", today, onsets));

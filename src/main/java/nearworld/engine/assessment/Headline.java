@@ -13,6 +13,7 @@ final class Headline {
     private static final int MONTHS = 12;
     /** The table's survival below which a term is not looked at any more. */
     private static final double LEAST_TABLE_SURVIVAL = 0.01;
+
     private static final double PER_MILLE = 1000;
     private static final double AGE_PRECISION = 1e-9;
 

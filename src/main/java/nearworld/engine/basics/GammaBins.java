@@ -10,8 +10,15 @@ public final class GammaBins {
     private static final int MAX_TERMS = 20_000;
     private static final double PRECISION = 1e-16;
     private static final double[] LANCZOS = {
-        0.99999999999980993, 676.5203681218851, -1259.1392167224028, 771.32342877765313, -176.61502916214059,
-        12.507343278686905, -0.13857109526572012, 9.9843695780195716e-6, 1.5056327351493116e-7
+        0.99999999999980993,
+        676.5203681218851,
+        -1259.1392167224028,
+        771.32342877765313,
+        -176.61502916214059,
+        12.507343278686905,
+        -0.13857109526572012,
+        9.9843695780195716e-6,
+        1.5056327351493116e-7
     };
 
     private GammaBins() {}
@@ -24,7 +31,8 @@ public final class GammaBins {
      */
     public static double[] means(double variance, int points) {
         if (!(variance >= 0) || points < 1) {
-            throw new IllegalArgumentException("variance and points must be >= 0 and >= 1, are " + variance + ", " + points);
+            throw new IllegalArgumentException(
+                    "variance and points must be >= 0 and >= 1, are " + variance + ", " + points);
         }
         if (variance == 0 || points == 1) {
             return new double[] {1};

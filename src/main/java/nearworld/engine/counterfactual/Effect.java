@@ -21,7 +21,9 @@ record Effect(double start, double logRatio, double excessPerYear, double halfLi
         }
         return new Effect(
                 start,
-                effect.hazardRatio() == null ? 0 : StrictMath.log(effect.hazardRatio().value()),
+                effect.hazardRatio() == null
+                        ? 0
+                        : StrictMath.log(effect.hazardRatio().value()),
                 effect.excessPerMille() == null ? 0 : effect.excessPerMille().value() / PER_MILLE,
                 effect.halfLifeYears() == null
                         ? Double.POSITIVE_INFINITY

@@ -139,8 +139,7 @@ final class Future {
         Strands next = new Strands(baseline.grid());
         for (Map.Entry<Strands.Key, ScoreMeasure> s : strands.measures().entrySet()) {
             Strands.Key key = s.getKey();
-            double shift = score(key.present(), curedNow, treatmentsNow)
-                    - score(key.present(), cured, treatments);
+            double shift = score(key.present(), curedNow, treatmentsNow) - score(key.present(), cured, treatments);
             long left = joins ? key.present() & ~curedNow & person.withExcess() : key.present();
             next.at(new Strands.Key(left, key.habit(), key.effects())).addShifted(s.getValue(), shift, 1);
         }
@@ -230,7 +229,8 @@ final class Future {
             double[] chances = chances(m, s.getKey().present() & ~curedBy, outcomes.size());
             for (int o = 0; o < chances.length; o++) {
                 if (!outcomes.get(o).fatal() && chances[o] > 0) {
-                    @Nullable Effect effect =
+                    @Nullable
+                    Effect effect =
                             Effect.of(outcomes.get(o).afterEffect(), m.event().at());
                     List<Effect> effects = new ArrayList<>(s.getKey().effects());
                     if (effect != null) {
@@ -284,7 +284,9 @@ final class Future {
             return;
         }
         long bit = 1L << brings.get(at).condition();
-        double on = (present & bit) != 0 || (ruledOut & bit) != 0 ? 0 : brings.get(at).factor().value();
+        double on = (present & bit) != 0 || (ruledOut & bit) != 0
+                ? 0
+                : brings.get(at).factor().value();
         if (on > 0) {
             branch(next, present | bit, before, measure, chance * on, effects, m, ruledOut, at + 1);
         }

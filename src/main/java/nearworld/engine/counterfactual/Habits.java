@@ -87,7 +87,13 @@ final class Habits {
     }
 
     private double ratio(int behaviour, int level) {
-        return pack.behaviours().get(behaviour).levels().get(level).hazardRatio().ratio().value();
+        return pack.behaviours()
+                .get(behaviour)
+                .levels()
+                .get(level)
+                .hazardRatio()
+                .ratio()
+                .value();
     }
 
     private double recorded(int behaviour, int level, double time) {

@@ -4,8 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import nearworld.engine.inference.ConditionStates;
-import nearworld.engine.inference.Evidence;
 import nearworld.engine.inference.EventMoment;
+import nearworld.engine.inference.Evidence;
 import nearworld.engine.inference.EvidenceFactors;
 import nearworld.engine.inference.Person;
 import nearworld.engine.network.EvidencePack.ConditionFactor;
@@ -128,15 +128,17 @@ final class Thinning {
 
     /** R′/R of an occurrence. */
     private double rateRatio(int j, long kept, int[] s) {
-        EventType event =
-                person.pack().events().get(person.evidence().occurrences().get(j).event());
+        EventType event = person.pack()
+                .events()
+                .get(person.evidence().occurrences().get(j).event());
         double ratio = 1;
         for (ConditionFactor r : event.conditionRates()) {
             int i = r.condition();
             double then = weightThen(i, j, kept, s);
             double recorded = evidence.weightAt(i, state(i, s), day(j));
             if (then != recorded) {
-                ratio *= (1 + then * (r.factor().value() - 1)) / (1 + recorded * (r.factor().value() - 1));
+                ratio *= (1 + then * (r.factor().value() - 1))
+                        / (1 + recorded * (r.factor().value() - 1));
             }
         }
         for (Map.Entry<Integer, Integer> b : new java.util.TreeMap<>(plan.always()).entrySet()) {

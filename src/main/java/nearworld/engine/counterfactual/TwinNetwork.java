@@ -102,8 +102,7 @@ final class TwinNetwork {
                 scope.add(twinVariable[l.parent()]);
             }
         }
-        int[] variables =
-                scope.stream().mapToInt(Integer::intValue).distinct().toArray();
+        int[] variables = scope.stream().mapToInt(Integer::intValue).distinct().toArray();
         int[] all = new int[cards.length];
         return Factor.of(variables, cards, s -> {
             for (int k = 0; k < variables.length; k++) {

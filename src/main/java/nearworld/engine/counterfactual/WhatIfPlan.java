@@ -49,7 +49,6 @@ public record WhatIfPlan(
 
     /** The recorded world: nothing is changed. */
     static WhatIfPlan none(String name) {
-        return new WhatIfPlan(
-                name, 0, Map.of(), Map.of(), 0, Map.of(), Map.of(), Map.of(), List.of(), List.of());
+        return new WhatIfPlan(name, 0, Map.of(), Map.of(), 0, Map.of(), Map.of(), Map.of(), List.of(), List.of());
     }
 }

@@ -102,8 +102,8 @@ public final class Worlds {
         List<Effect> effects = new ArrayList<>();
         for (Evidence.Occurrence o : person.evidence().occurrences()) {
             Outcome outcome = person.pack().events().get(o.event()).outcomes().get(o.outcome());
-            @Nullable Effect effect =
-                    Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay()));
+            @Nullable
+            Effect effect = Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay()));
             if (effect != null) {
                 effects.add(effect);
             }
@@ -114,8 +114,7 @@ public final class Worlds {
     /** The prior with after-effects and switches on: what learns nothing from the history. */
     public WorldCurve unlearned() {
         ConditionStates states = posterior.states();
-        EvidenceFactors prior =
-                new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), false);
+        EvidenceFactors prior = new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), false);
         Strands strands = new Strands(person.baseline().grid());
         List<Effect> effects = recordedEffects();
         new HiddenStates(
@@ -134,7 +133,8 @@ public final class Worlds {
     /** A what-if: the posterior carried over by the twin network and by thinning, then lived on. */
     public WorldCurve whatIf(WhatIfPlan asked) {
         WhatIfPlan plan = effective(asked);
-        boolean undoes = plan.removed() != 0 || plan.never() != 0 || !plan.always().isEmpty();
+        boolean undoes =
+                plan.removed() != 0 || plan.never() != 0 || !plan.always().isEmpty();
         ConditionStates states =
                 new ConditionStates(person.pack(), person.evidence().occurrences(), undoes);
         EvidenceFactors evidence =
@@ -162,8 +162,8 @@ public final class Worlds {
                 loose);
         Map<Integer, Habits.Change> changes = new TreeMap<>();
         plan.habits().forEach((b, h) -> changes.put(b, new Habits.Change(h.level(), h.from())));
-        Habits habits = new Habits(
-                person.pack(), person.scores(), person.evidence(), habits(person.evidence(), plan), changes);
+        Habits habits =
+                new Habits(person.pack(), person.scores(), person.evidence(), habits(person.evidence(), plan), changes);
         Strands strands = new Strands(person.baseline().grid());
         hidden.forEach((s, measure) -> {
             if (!person.aftermath().isNeutral()) {
@@ -207,7 +207,8 @@ public final class Worlds {
                     present |= on || twin.before(i, s) ? 1L << i : 0;
                 }
             }
-            double shift = levels + person.scores().of(present) - person.scores().of(before);
+            double shift =
+                    levels + person.scores().of(present) - person.scores().of(before);
             strands.at(new Strands.Key(present & tracked, habits.key(s), course.effects()))
                     .addShifted(measure, shift, course.probability());
         }

@@ -49,11 +49,7 @@ public final class Aftermath {
 
     /** @param excess by condition, null where it adds no rate */
     Aftermath(
-            Baseline baseline,
-            Evidence evidence,
-            EvidencePack pack,
-            Scores scores,
-            List<@Nullable ExcessRate> excess) {
+            Baseline baseline, Evidence evidence, EvidencePack pack, Scores scores, List<@Nullable ExcessRate> excess) {
         this.baseline = baseline;
         this.evidence = evidence;
         this.pack = pack;
@@ -123,7 +119,8 @@ public final class Aftermath {
     public static double decay(AfterEffect effect, double since) {
         return effect.halfLifeYears() == null
                 ? 1
-                : StrictMath.exp(-StrictMath.log(2) * since / effect.halfLifeYears().value());
+                : StrictMath.exp(
+                        -StrictMath.log(2) * since / effect.halfLifeYears().value());
     }
 
     /** Ages between which everything is smooth. */
@@ -131,7 +128,9 @@ public final class Aftermath {
         double start = evidence.age(from);
         double end = evidence.age(to);
         java.util.TreeSet<Double> breaks = new java.util.TreeSet<>();
-        for (double a = baseline.table().nextBreak(start); a < end; a = baseline.table().nextBreak(a)) {
+        for (double a = baseline.table().nextBreak(start);
+                a < end;
+                a = baseline.table().nextBreak(a)) {
             breaks.add(a);
         }
         breaks.add(baseline.taper().from());
@@ -179,8 +178,7 @@ public final class Aftermath {
             long upTo = states.occurrencesBefore(s.day(), true);
             long present = before;
             for (int i = 0; i < pack.conditions().size(); i++) {
-                if (states.mayBeBroughtOn(i)
-                        && (states.switches(i, stateOfCondition.applyAsInt(i)) & upTo) != 0) {
+                if (states.mayBeBroughtOn(i) && (states.switches(i, stateOfCondition.applyAsInt(i)) & upTo) != 0) {
                     present |= 1L << i;
                 }
             }

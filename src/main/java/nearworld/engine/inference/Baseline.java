@@ -35,8 +35,7 @@ public final class Baseline {
     /**
      * @param classes the population by its added rate of death a year: parallel lists
      */
-    Baseline(
-            LifeTable table, Taper taper, ScoreGrid grid, double age, List<ScoreMeasure> classes, double[] excess) {
+    Baseline(LifeTable table, Taper taper, ScoreGrid grid, double age, List<ScoreMeasure> classes, double[] excess) {
         this.table = table;
         this.taper = taper;
         this.grid = grid;

@@ -31,7 +31,8 @@ public final class ConditionStates {
             List<Integer> bringers = new ArrayList<>();
             List<Double> chances = new ArrayList<>();
             for (int j = 0; j < occurrences.size(); j++) {
-                for (ConditionFactor b : pack.events().get(occurrences.get(j).event()).bringsOn()) {
+                for (ConditionFactor b :
+                        pack.events().get(occurrences.get(j).event()).bringsOn()) {
                     if (b.condition() == i) {
                         bringers.add(j);
                         chances.add(b.factor().value());

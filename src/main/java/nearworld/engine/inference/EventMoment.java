@@ -67,7 +67,9 @@ public final class EventMoment {
         }
         for (LevelFactor r : event.behaviourRates()) {
             unary.add(Factor.of(
-                    new int[] {r.behaviour()}, prior.cards(), s -> s[0] == r.level() ? r.factor().value() : 1));
+                    new int[] {r.behaviour()},
+                    prior.cards(),
+                    s -> s[0] == r.level() ? r.factor().value() : 1));
         }
         return unary;
     }

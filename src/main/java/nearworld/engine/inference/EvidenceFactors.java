@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.TreeSet;
+import nearworld.engine.basics.AgeCurve;
 import nearworld.engine.basics.Exponential;
 import nearworld.engine.network.EvidencePack;
 import nearworld.engine.network.EvidencePack.ConditionFactor;
@@ -13,7 +14,6 @@ import nearworld.engine.network.EvidencePack.FindingLevel;
 import nearworld.engine.network.EvidencePack.LevelFactor;
 import nearworld.engine.network.EvidencePack.Link;
 import nearworld.engine.network.EvidencePack.Source;
-import nearworld.engine.basics.AgeCurve;
 
 /**
  * The prior and the likelihood of the evidence as tables over the hidden state: behaviours, conditions with their switches,
@@ -186,8 +186,7 @@ public final class EvidenceFactors {
 
     /** A finding of several conditions: a noisy-OR of its first level. */
     private void addJointFinding(Finding finding, Evidence.Found found) {
-        int[] scope =
-                finding.of().stream().mapToInt(prior::conditionVariable).toArray();
+        int[] scope = finding.of().stream().mapToInt(prior::conditionVariable).toArray();
         FindingLevel first = finding.levels().get(0);
         double absent = first.absent().value();
         add(scope, s -> {
@@ -264,7 +263,9 @@ public final class EvidenceFactors {
     public static double levelRate(EventType event, int behaviour, int level) {
         double rate = 1;
         for (LevelFactor r : event.behaviourRates()) {
-            rate *= r.behaviour() == behaviour && r.level() == level ? r.factor().value() : 1;
+            rate *= r.behaviour() == behaviour && r.level() == level
+                    ? r.factor().value()
+                    : 1;
         }
         return rate;
     }
@@ -306,12 +307,9 @@ public final class EvidenceFactors {
             add(new int[] {b}, s -> levelRate(event, b, s[0]));
         }
         double[] frailty = prior.frailty();
-        add(
-                new int[] {prior.frailtyVariable()},
-                s -> moment.frailtyRate(frailty[s[0]]) / moment.meanRate());
+        add(new int[] {prior.frailtyVariable()}, s -> moment.frailtyRate(frailty[s[0]]) / moment.meanRate());
         int[] conditions = moment.outcomeConditions();
-        int[] scope =
-                Arrays.stream(conditions).map(prior::conditionVariable).toArray();
+        int[] scope = Arrays.stream(conditions).map(prior::conditionVariable).toArray();
         add(scope, s -> {
             double[] present = new double[conditions.length];
             for (int k = 0; k < present.length; k++) {

@@ -25,8 +25,7 @@ public final class Person {
      * @param prior without faults
      * @param smoking the behaviour that the table is split by, or -1, and its levels in the table's class
      */
-    public Person(
-            PopulationPrior prior, Evidence evidence, LifeTable table, int smoking, List<Integer> smokingLevels) {
+    public Person(PopulationPrior prior, Evidence evidence, LifeTable table, int smoking, List<Integer> smokingLevels) {
         this.prior = prior;
         this.pack = prior.pack();
         this.evidence = evidence;
@@ -36,8 +35,8 @@ public final class Person {
                 : evidence.age(evidence.occurrences().get(0).day());
         ScoreGrid grid = scores.grid(prior, pack.taper().at(Math.min(earliest, evidence.age())));
         Population population = new Population(prior, scores, grid, smoking, smokingLevels);
-        this.baseline = new Baseline(
-                table, pack.taper(), grid, evidence.age(), population.classes(), population.excess());
+        this.baseline =
+                new Baseline(table, pack.taper(), grid, evidence.age(), population.classes(), population.excess());
         for (Evidence.Occurrence o : evidence.occurrences()) {
             moments.add(new EventMoment(prior, o.event(), evidence.age(o.day())));
         }

@@ -27,8 +27,7 @@ final class Population {
             double share = smokingLevels.stream()
                     .mapToDouble(l -> prior.share(smoking, l))
                     .sum();
-            factors.add(Factor.of(
-                    new int[] {smoking}, cards, s -> smokingLevels.contains(s[0]) ? 1 / share : 0));
+            factors.add(Factor.of(new int[] {smoking}, cards, s -> smokingLevels.contains(s[0]) ? 1 / share : 0));
         }
         TreeSet<Integer> withExcess = new TreeSet<>();
         TreeSet<Integer> loose = new TreeSet<>();
@@ -43,7 +42,9 @@ final class Population {
                 .forEach((state, measure) -> {
                     double rate = 0;
                     for (int v : withExcess) {
-                        Excess e = pack.conditions().get(v - pack.behaviours().size()).excess();
+                        Excess e = pack.conditions()
+                                .get(v - pack.behaviours().size())
+                                .excess();
                         rate += state[v] == 1 && e != null ? e.unknown().value() / 1000 : 0;
                     }
                     byRate.computeIfAbsent(rate, r -> new ScoreMeasure(grid)).addShifted(measure, 0, 1);

@@ -40,7 +40,8 @@ public final class PopulationPrior {
         this.age = age;
         int behaviours = pack.behaviours().size();
         int conditions = pack.conditions().size();
-        this.frailty = GammaBins.means(pack.frailty().variance().value(), pack.frailty().points());
+        this.frailty = GammaBins.means(
+                pack.frailty().variance().value(), pack.frailty().points());
         this.cards = new int[behaviours + conditions + 1];
         this.shares = new double[behaviours][];
         for (int b = 0; b < behaviours; b++) {
@@ -273,7 +274,8 @@ public final class PopulationPrior {
 
     /** ω: the probability that what is there now was there at an age. */
     double presentAt(int condition, double atAge) {
-        return Math.min(1, pack.conditions().get(condition).prevalence().get(sex).at(atAge) / prevalences[condition]);
+        return Math.min(
+                1, pack.conditions().get(condition).prevalence().get(sex).at(atAge) / prevalences[condition]);
     }
 
     /** The levels' own scores, ln HR / g(atAge). */

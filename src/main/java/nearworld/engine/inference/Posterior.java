@@ -15,10 +15,8 @@ public final class Posterior {
 
     public Posterior(Person person) {
         this.person = person;
-        this.states = new ConditionStates(
-                person.pack(), person.evidence().occurrences(), false);
-        this.factors =
-                new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), true);
+        this.states = new ConditionStates(person.pack(), person.evidence().occurrences(), false);
+        this.factors = new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), true);
         this.rows = person.scores().withPartners(person.mayBeBroughtOn()) | person.withExcess();
         TreeSet<Integer> outer = person.variables(rows);
         TreeSet<Integer> loose = person.variables(~rows);
@@ -32,8 +30,8 @@ public final class Posterior {
                 loose);
         double[] ones = new double[person.baseline().grid().size()];
         java.util.Arrays.fill(ones, 1);
-        double[][] marginals = hidden.marginals(
-                s -> person.aftermath().isNeutral() ? ones : aftermath(person, states, rows, s));
+        double[][] marginals =
+                hidden.marginals(s -> person.aftermath().isNeutral() ? ones : aftermath(person, states, rows, s));
         double[] z = marginals[person.prior().frailtyVariable()];
         double total = 0;
         for (double mass : z) {

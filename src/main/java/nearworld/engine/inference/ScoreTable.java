@@ -6,7 +6,8 @@ import org.jspecify.annotations.Nullable;
 record ScoreTable(int[] scope, int[] cards, @Nullable ScoreMeasure[] entries) {
 
     /** The entry for the states of all variables, of which those of the scope are read; null: impossible. */
-    @Nullable ScoreMeasure at(int[] stateOfVariable) {
+    @Nullable
+    ScoreMeasure at(int[] stateOfVariable) {
         int index = 0;
         for (int i = 0; i < scope.length; i++) {
             index = index * cards[i] + stateOfVariable[scope[i]];

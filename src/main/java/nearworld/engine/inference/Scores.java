@@ -25,8 +25,8 @@ public final class Scores {
     public Scores(EvidencePack pack) {
         this.pack = pack;
         this.conditions = pack.conditions().stream()
-                .mapToDouble(c -> score(
-                        c.hazardRatio().ratio().value(), c.hazardRatio().atAge()))
+                .mapToDouble(c ->
+                        score(c.hazardRatio().ratio().value(), c.hazardRatio().atAge()))
                 .toArray();
         this.interactionMembers = pack.interactions().stream()
                 .mapToLong(i -> i.of().stream().mapToLong(c -> 1L << c).sum())

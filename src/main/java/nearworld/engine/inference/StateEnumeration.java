@@ -53,8 +53,7 @@ public final class StateEnumeration {
     /** A factor that closes at a level: where its other variables' states are found, and how far each moves its index. */
     private record Part(double[] values, int[] variables, int[] strides, int ownStride) {}
 
-    StateEnumeration(
-            int[] outer, int[] inner, List<Factor> factors, List<Factor> scores, int[] cards, ScoreGrid grid) {
+    StateEnumeration(int[] outer, int[] inner, List<Factor> factors, List<Factor> scores, int[] cards, ScoreGrid grid) {
         this.grid = grid;
         this.outerCount = outer.length;
         this.stateOfVariable = new int[cards.length];
@@ -163,7 +162,11 @@ public final class StateEnumeration {
     }
 
     private double integrate(
-            int at, double weight, double score, Integrand integrand, double @org.jspecify.annotations.Nullable [] given) {
+            int at,
+            double weight,
+            double score,
+            Integrand integrand,
+            double @org.jspecify.annotations.Nullable [] given) {
         double[] function = given == null && at == outerCount ? integrand.at(stateOfVariable) : given;
         if (at == levels.length) {
             if (function == null) {
@@ -181,8 +184,7 @@ public final class StateEnumeration {
         for (int s = 0; s < level.card; s++) {
             if (level.weight[s] != 0) {
                 stateOfVariable[level.variable] = s;
-                double mass = integrate(
-                        at + 1, weight * level.weight[s], score + level.score[s], integrand, function);
+                double mass = integrate(at + 1, weight * level.weight[s], score + level.score[s], integrand, function);
                 level.mass[s] += mass;
                 total += mass;
             }
