@@ -18,6 +18,6 @@ import org.springframework.test.context.ContextConfiguration;
 @Retention(RetentionPolicy.RUNTIME)
 @Inherited
 @ContextConfiguration(initializers = PostgresForTests.Initializer.class)
-@Import({DatabaseConfiguration.class, DataFolder.class})
+@Import({DatabaseConfiguration.class, DataFolder.class, OwnerConnection.class})
 @AutoConfigureTestDatabase(replace = AutoConfigureTestDatabase.Replace.NONE)
 public @interface OnPostgres {}

@@ -16,6 +16,8 @@ public record TestDatabase(String url, String ownerPassword, String appPassword)
     /** The settings that lead an application to this database as to an external server. */
     public Map<String, String> settings() {
         return Map.of(
+                "nearworld.data",
+                "target/test-data",
                 "nearworld.database.url",
                 url,
                 "nearworld.database.user",
