@@ -53,9 +53,9 @@ public final class EventMoment {
         return age;
     }
 
-    /** ω of the population; a condition that is there now is there at every later age. */
-    double presentAt(int condition) {
-        return age >= prior.age() ? 1 : prior.presentAt(condition, age);
+    /** ω of the population at this age, past or to come. */
+    private double presentAt(int condition) {
+        return prior.presentAt(condition, age);
     }
 
     private List<Factor> rateFactors() {

@@ -11,6 +11,9 @@ public final class ScoreGrid {
     static final int POINTS = 10;
     private static final double STEP_TIMES_G = 0.08;
     private static final double SMALLEST_G = 0.4;
+    /** Every spreading over ten nodes widens a measure by five at most; so many may follow one another. */
+    private static final int MARGIN = 10 * (POINTS / 2);
+
     private static final double[] DENOMINATORS = denominators();
 
     private final int originSteps;
@@ -24,8 +27,8 @@ public final class ScoreGrid {
      */
     ScoreGrid(double lowest, double highest, double steepest) {
         this.step = STEP_TIMES_G / Math.max(steepest, SMALLEST_G);
-        this.originSteps = (int) Math.floor(lowest / step) - POINTS;
-        this.size = (int) Math.ceil(highest / step) + POINTS + 1 - originSteps;
+        this.originSteps = (int) Math.floor(lowest / step) - MARGIN;
+        this.size = (int) Math.ceil(highest / step) + MARGIN + 1 - originSteps;
     }
 
     public int size() {
