@@ -17,6 +17,8 @@ public record OptionGroup(String label, List<Option> options) {
 
     /** Whether a value can be picked in one of the groups. */
     public static boolean offers(List<OptionGroup> groups, String value) {
-        return groups.stream().flatMap(g -> g.options().stream()).anyMatch(o -> o.value().equals(value));
+        return groups.stream()
+                .flatMap(g -> g.options().stream())
+                .anyMatch(o -> o.value().equals(value));
     }
 }

@@ -13,8 +13,8 @@ import nearworld.app.forms.HistoryForm;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 
-/** What the selects of the pages offer. Templates know it as {@code @options}. */
-@Component("options")
+/** What the selects of the pages offer. Templates know it as {@code options}. */
+@Component
 public class Options {
     private final MessageSource words;
 
@@ -97,10 +97,12 @@ public class Options {
 
     /** The occurrences typed in the history; the value is {@code event@date}. */
     public List<OptionGroup> occurrences(HistoryForm history, PackChoices choices) {
-        return plain(history.history().stream().flatMap(row -> row.occurrences().stream()
-                .filter(o -> !o.on().isBlank() && !row.event().isBlank())
-                .map(o -> new Option(
-                        row.event() + "@" + o.on().strip(), label(choices, row.event(), o.on(), o.outcome())))));
+        return plain(history.history().stream()
+                .flatMap(row -> row.occurrences().stream()
+                        .filter(o -> !o.on().isBlank() && !row.event().isBlank())
+                        .map(o -> new Option(
+                                row.event() + "@" + o.on().strip(),
+                                label(choices, row.event(), o.on(), o.outcome())))));
     }
 
     private static String label(PackChoices choices, String event, String on, String outcome) {

@@ -6,8 +6,8 @@ import nearworld.engine.basics.Fault;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 
-/** The sentence that tells a fault or a warning. Templates know it as {@code @faultWords}. */
-@Component("faultWords")
+/** The sentence that tells a fault or a warning. Templates know it as {@code faultWords}. */
+@Component
 public class FaultWords {
     private final MessageSource words;
 

@@ -14,8 +14,8 @@ import nearworld.engine.basics.PartialDate;
 import org.springframework.context.MessageSource;
 import org.springframework.stereotype.Component;
 
-/** Numbers and dates as words with their units, in a language. Templates know it as {@code @figures}. */
-@Component("figures")
+/** Numbers and dates as words with their units, in a language. Templates know it as {@code figures}. */
+@Component
 public class Figures {
     /** Probabilities below this, or above its complement, are not told apart: the evidence does not carry more. */
     private static final double LEAST_TOLD = 0.001;
