@@ -3,7 +3,7 @@ package nearworld.app.drawing;
 /** How wide a drawing is: it is laid out afresh for each, with letters of the same size, and never merely shrunk. */
 public enum Format {
     /** For a whole page, 1160 units: words left and right of the strips. */
-    WIDE(1160, 218, 152, 5),
+    WIDE(1160, 226, 166, 5),
     /** For a column beside a form, 720 units: words above the strips. */
     MEDIUM(720, 14, 14, 5),
     /** For a telephone, 358 units. */

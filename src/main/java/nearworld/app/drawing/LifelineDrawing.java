@@ -76,7 +76,8 @@ public final class LifelineDrawing {
     private static void tick(Svg svg, double x, double axis, int year, String age) {
         svg.line(x, HEAD - 12, x, axis, Ink.RULE, 0.8);
         svg.text(x, axis + 16, SMALL, Ink.MUTED, "middle", Integer.toString(year));
-        svg.text(x, axis + 31, SMALL, Ink.MUTED, "middle", age);
+        boolean cut = x < Lettering.width(age, SMALL) / 2;
+        svg.text(cut ? 0 : x, axis + 31, SMALL, Ink.MUTED, cut ? "start" : "middle", age);
     }
 
     private static String age(Lifeline lifeline, LocalDate day) {

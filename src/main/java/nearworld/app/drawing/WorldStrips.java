@@ -49,9 +49,14 @@ final class WorldStrips {
     }
 
     void draw(Svg svg) {
-        partings(svg);
         for (int i = 0; i < lifeline.strips().size(); i++) {
             strip(svg, i);
+        }
+        partings(svg);
+        for (int i = 0; i < lifeline.strips().size(); i++) {
+            Lifeline.Strip strip = lifeline.strips().get(i);
+            spread(svg, strip, base(i) + 8);
+            words(svg, strip, base(i));
         }
     }
 
@@ -66,8 +71,6 @@ final class WorldStrips {
             svg.stroke(outline(0, base, 0), Ink.PAPER, 1.1, "1.5 2.5");
         }
         svg.line(time.today(), base, time.right(), base, Ink.RULE, 1);
-        spread(svg, strip, base + 8);
-        words(svg, strip, base);
     }
 
     private void ink(Svg svg, int i, Lifeline.Strip strip, double base) {
