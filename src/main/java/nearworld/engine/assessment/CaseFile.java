@@ -85,14 +85,14 @@ public record CaseFile(
      * The cover applied for.
      *
      * @param years the term; null for the whole of life
-     * @param interest per year, for example 0.03
+     * @param interest per year, for example 0.03; null where none is given
      */
     public record Cover(
             CoverKind kind,
             @Nullable Integer years,
             @Nullable BigDecimal sumAssured,
             @Nullable String currency,
-            double interest) {}
+            @Nullable Double interest) {}
 
     /** The kinds of cover. */
     public enum CoverKind {
