@@ -26,6 +26,8 @@ final class Thinning {
     private final ConditionStates states;
     private final EvidenceFactors evidence;
     private final TwinNetwork twin;
+    private final long[] earlierOccurrences;
+    private final @Nullable List<Course> onlyCourse;
     private boolean newOccurrences;
 
     /**
@@ -42,6 +44,22 @@ final class Thinning {
         this.states = states;
         this.evidence = evidence;
         this.twin = twin;
+        this.earlierOccurrences = person.evidence().occurrences().stream()
+                .mapToLong(o -> states.occurrencesBefore(o.day(), false))
+                .toArray();
+        this.onlyCourse = plan.undoesNothing() ? List.of(nothingUndone()) : null;
+    }
+
+    /** All occurrences stay, with the outcomes and starts that the plan gives. */
+    private Course nothingUndone() {
+        List<Course> course = List.of(new Course(1, 0, List.of()));
+        for (int j = 0; j < person.evidence().occurrences().size(); j++) {
+            List<Course> next = new ArrayList<>();
+            int recorded = person.evidence().occurrences().get(j).outcome();
+            add(j, course.get(0), 1, plan.outcomes().getOrDefault(j, recorded), next);
+            course = next;
+        }
+        return course.get(0);
     }
 
     /** Whether some occurrence would have been more frequent than recorded. */
@@ -51,6 +69,9 @@ final class Thinning {
 
     /** The courses that leave the person alive today; their probabilities sum to at most 1. */
     List<Course> courses(int[] stateOfVariable) {
+        if (onlyCourse != null) {
+            return onlyCourse;
+        }
         List<Course> courses = List.of(new Course(1, 0, List.of()));
         for (int j = 0; j < person.evidence().occurrences().size(); j++) {
             List<Course> next = new ArrayList<>();
@@ -86,8 +107,19 @@ final class Thinning {
             add(j, course, probability, given, next);
             return;
         }
-        double[] before = probabilities(j, moment, i -> evidence.weightAt(i, state(i, s), day(j)));
-        double[] after = probabilities(j, moment, i -> weightThen(i, j, course.kept(), s));
+        int[] conditions = moment.outcomeConditions();
+        double[] weights = new double[conditions.length];
+        double[] weightsThen = new double[conditions.length];
+        for (int k = 0; k < conditions.length; k++) {
+            weights[k] = evidence.weightAt(conditions[k], state(conditions[k], s), j);
+            weightsThen[k] = weightThen(conditions[k], j, course.kept(), s);
+        }
+        if (java.util.Arrays.equals(weights, weightsThen)) {
+            add(j, course, probability, recorded, next);
+            return;
+        }
+        double[] before = moment.outcomeProbabilities(weights);
+        double[] after = moment.outcomeProbabilities(weightsThen);
         double stays = Math.min(1, after[recorded] / before[recorded]);
         add(j, course, probability * stays, recorded, next);
         double rising = 0;
@@ -117,15 +149,6 @@ final class Thinning {
         next.add(new Course(probability, course.kept() | 1L << j, List.copyOf(effects)));
     }
 
-    private double[] probabilities(int j, EventMoment moment, java.util.function.IntToDoubleFunction weight) {
-        int[] conditions = moment.outcomeConditions();
-        double[] weights = new double[conditions.length];
-        for (int k = 0; k < weights.length; k++) {
-            weights[k] = weight.applyAsDouble(conditions[k]);
-        }
-        return moment.outcomeProbabilities(weights);
-    }
-
     /** R′/R of an occurrence. */
     private double rateRatio(int j, long kept, int[] s) {
         EventType event = person.pack()
@@ -135,7 +158,7 @@ final class Thinning {
         for (ConditionFactor r : event.conditionRates()) {
             int i = r.condition();
             double then = weightThen(i, j, kept, s);
-            double recorded = evidence.weightAt(i, state(i, s), day(j));
+            double recorded = evidence.weightAt(i, state(i, s), j);
             if (then != recorded) {
                 ratio *= (1 + then * (r.factor().value() - 1))
                         / (1 + recorded * (r.factor().value() - 1));
@@ -153,18 +176,14 @@ final class Thinning {
         if ((plan.never() >> condition & 1) != 0) {
             return 0;
         }
-        long earlier = states.occurrencesBefore(day(j), false) & kept;
+        long earlier = earlierOccurrences[j] & kept;
         if ((states.switches(condition, state(condition, s)) & earlier) != 0) {
             return 1;
         }
-        return twin.before(condition, s) ? evidence.presentOn(condition, day(j)) : 0;
+        return twin.before(condition, s) ? evidence.presentAtOccurrence(condition, j) : 0;
     }
 
     private int state(int condition, int[] s) {
         return s[person.prior().conditionVariable(condition)];
-    }
-
-    private long day(int j) {
-        return person.evidence().occurrences().get(j).day();
     }
 }

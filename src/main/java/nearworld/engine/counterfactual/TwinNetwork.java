@@ -4,6 +4,8 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
+import java.util.TreeSet;
 import nearworld.engine.inference.ConditionStates;
 import nearworld.engine.inference.EvidenceFactors;
 import nearworld.engine.inference.Factor;
@@ -25,7 +27,8 @@ final class TwinNetwork {
     private final long affected;
     private final int[] twinVariable;
     private final int[] cards;
-    private final List<Factor> factors = new ArrayList<>();
+    private final int[] inOrder;
+    private final Map<Integer, Factor> transitions = new TreeMap<>();
 
     TwinNetwork(Person person, WhatIfPlan plan, ConditionStates states, EvidenceFactors evidence) {
         this.person = person;
@@ -39,9 +42,12 @@ final class TwinNetwork {
         }
         this.cards = Arrays.copyOf(evidence.cards(), variables);
         Arrays.fill(cards, evidence.cards().length, variables, 2);
+        this.inOrder = Arrays.stream(person.prior().topological())
+                .filter(this::isAffected)
+                .toArray();
         for (int i = 0; i < twinVariable.length; i++) {
             if (isAffected(i)) {
-                factors.add(transition(i, evidence));
+                transitions.put(i, transition(i, evidence));
             }
         }
     }
@@ -64,17 +70,45 @@ final class TwinNetwork {
         return (affected >> condition & 1) != 0;
     }
 
-    int[] cards() {
-        return cards;
+    /** The recorded world's variables that the what-if world's conditions depend on. */
+    TreeSet<Integer> dependsOn() {
+        TreeSet<Integer> variables = new TreeSet<>();
+        int recorded = cards.length - inOrder.length;
+        for (Factor f : transitions.values()) {
+            Arrays.stream(f.scope()).filter(v -> v < recorded).forEach(variables::add);
+        }
+        return variables;
     }
 
-    List<Factor> factors() {
-        return factors;
+    /** What is done with a state of the what-if world's conditions and its probability given the recorded state. */
+    interface Visitor {
+        void visit(int[] stateOfVariable, double probability);
     }
 
-    /** The variables of the what-if world's own conditions. */
-    int[] variables() {
-        return Arrays.stream(twinVariable).filter(v -> v >= 0).toArray();
+    /**
+     * Visits the what-if world's states that go with a recorded state.
+     *
+     * @param recorded states by variable, read where {@link #dependsOn()} says
+     * @param negligible states of a probability up to this are left out
+     */
+    void forEach(int[] recorded, double negligible, Visitor visitor) {
+        descend(0, Arrays.copyOf(recorded, cards.length), 1, negligible, visitor);
+    }
+
+    private void descend(int at, int[] states, double probability, double negligible, Visitor visitor) {
+        if (at == inOrder.length) {
+            visitor.visit(states, probability);
+            return;
+        }
+        int condition = inOrder[at];
+        Factor transition = java.util.Objects.requireNonNull(transitions.get(condition));
+        for (int s = 0; s < 2; s++) {
+            states[twinVariable[condition]] = s;
+            double reached = probability * transition.at(states);
+            if (reached > negligible) {
+                descend(at + 1, states, reached, negligible, visitor);
+            }
+        }
     }
 
     /** Whether a condition is present before all occurrences in the what-if world. */

@@ -47,6 +47,11 @@ public record WhatIfPlan(
     /** An event at a time; outcome -1: its shares follow from the conditions then present. */
     public record Added(int event, double at, int outcome) {}
 
+    /** True where every recorded occurrence stays as it was or as the plan itself says. */
+    boolean undoesNothing() {
+        return removed == 0 && never == 0 && always.isEmpty();
+    }
+
     /** The recorded world: nothing is changed. */
     static WhatIfPlan none(String name) {
         return new WhatIfPlan(name, 0, Map.of(), Map.of(), 0, Map.of(), Map.of(), Map.of(), List.of(), List.of());

@@ -9,7 +9,6 @@ import nearworld.engine.inference.Baseline;
 import nearworld.engine.inference.ConditionStates;
 import nearworld.engine.inference.Evidence;
 import nearworld.engine.inference.EvidenceFactors;
-import nearworld.engine.inference.Factor;
 import nearworld.engine.inference.HiddenStates;
 import nearworld.engine.inference.Person;
 import nearworld.engine.inference.Posterior;
@@ -20,6 +19,9 @@ import org.jspecify.annotations.Nullable;
 
 /** The worlds of a living person: who the people in them are today, and how long they live from there. */
 public final class Worlds {
+    /** Twin states below this part of the whole are left out: a million of them stay within 1e-8. */
+    private static final double NEGLIGIBLE = 1e-14;
+
     private final Person person;
     private final Posterior posterior;
 
@@ -114,12 +116,15 @@ public final class Worlds {
     /** The prior with after-effects and switches on: what learns nothing from the history. */
     public WorldCurve unlearned() {
         ConditionStates states = posterior.states();
-        EvidenceFactors prior = new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), false);
+        EvidenceFactors prior = person.factors(states, false);
         Strands strands = new Strands(person.baseline().grid());
         List<Effect> effects = recordedEffects();
         new HiddenStates(
                         prior.factors(),
                         person.scores().terms(person.prior(), states, prior.cards()),
+                        prior.exposures(),
+                        prior.frailty(),
+                        1,
                         prior.cards(),
                         person.baseline().grid(),
                         person.variables(posterior.rows()),
@@ -133,30 +138,28 @@ public final class Worlds {
     /** A what-if: the posterior carried over by the twin network and by thinning, then lived on. */
     public WorldCurve whatIf(WhatIfPlan asked) {
         WhatIfPlan plan = effective(asked);
-        boolean undoes =
-                plan.removed() != 0 || plan.never() != 0 || !plan.always().isEmpty();
-        ConditionStates states =
-                new ConditionStates(person.pack(), person.evidence().occurrences(), undoes);
-        EvidenceFactors evidence =
-                new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), true);
+        boolean undoes = !plan.undoesNothing();
+        ConditionStates states = undoes
+                ? new ConditionStates(person.pack(), person.evidence().occurrences(), true)
+                : posterior.states();
+        EvidenceFactors evidence = undoes ? person.factors(states, true) : posterior.factors();
         TwinNetwork twin = new TwinNetwork(person, plan, states, evidence);
         Thinning thinning = new Thinning(person, plan, states, evidence, twin);
         long tracked = Future.tracked(person, plan);
         long told = told(plan, tracked);
         TreeSet<Integer> outer = person.variables(told);
-        for (int v : twin.variables()) {
-            outer.add(v);
-        }
+        outer.addAll(twin.dependsOn());
         outer.addAll(plan.always().keySet());
         outer.addAll(plan.habits().keySet());
         TreeSet<Integer> loose = person.variables(~told);
         loose.removeAll(evidence.coupled());
-        List<Factor> factors = new ArrayList<>(evidence.factors());
-        factors.addAll(twin.factors());
         HiddenStates hidden = new HiddenStates(
-                factors,
-                person.scores().terms(person.prior(), states, twin.cards()),
-                twin.cards(),
+                evidence.factors(),
+                person.scores().terms(person.prior(), states, evidence.cards()),
+                evidence.exposures(),
+                evidence.frailty(),
+                posterior.mass(),
+                evidence.cards(),
                 person.baseline().grid(),
                 outer,
                 loose);
@@ -169,7 +172,12 @@ public final class Worlds {
             if (!person.aftermath().isNeutral()) {
                 measure.multiply(Posterior.aftermath(person, states, told, s));
             }
-            place(strands, plan, states, twin, thinning, habits, told, tracked, s, measure);
+            double negligible = NEGLIGIBLE * posterior.mass() / Math.max(measure.size(), Double.MIN_NORMAL);
+            twin.forEach(
+                    s,
+                    negligible,
+                    (both, probability) -> place(
+                            strands, plan, states, twin, thinning, habits, told, tracked, both, measure, probability));
         });
         strands.trim();
         double alive = strands.total() / posterior.mass();
@@ -186,7 +194,8 @@ public final class Worlds {
             long told,
             long tracked,
             int[] s,
-            ScoreMeasure measure) {
+            ScoreMeasure measure,
+            double probability) {
         double levels = 0;
         for (Map.Entry<Integer, Integer> b : new TreeMap<>(plan.always()).entrySet()) {
             levels += person.scores().level(b.getKey(), b.getValue())
@@ -210,7 +219,7 @@ public final class Worlds {
             double shift =
                     levels + person.scores().of(present) - person.scores().of(before);
             strands.at(new Strands.Key(present & tracked, habits.key(s), course.effects()))
-                    .addShifted(measure, shift, course.probability());
+                    .addShifted(measure, shift, probability * course.probability());
         }
     }
 

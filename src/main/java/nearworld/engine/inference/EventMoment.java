@@ -22,12 +22,19 @@ public final class EventMoment {
     private final EventType event;
     private final double age;
     private final double meanRate;
+    private final int[] outcomeConditions;
     private double[] theta = {};
 
     public EventMoment(PopulationPrior prior, int event, double age) {
         this.prior = prior;
         this.event = prior.pack().events().get(event);
         this.age = age;
+        this.outcomeConditions = this.event.outcomes().stream()
+                .flatMap(o -> o.oddsRatios().stream())
+                .mapToInt(ConditionFactor::condition)
+                .distinct()
+                .sorted()
+                .toArray();
         double frailtyMean = 0;
         for (double z : prior.frailty()) {
             frailtyMean += frailtyRate(z) / prior.frailty().length;
@@ -76,12 +83,7 @@ public final class EventMoment {
 
     /** The conditions that move the odds of the outcomes, in the pack's order. */
     public int[] outcomeConditions() {
-        return event.outcomes().stream()
-                .flatMap(o -> o.oddsRatios().stream())
-                .mapToInt(ConditionFactor::condition)
-                .distinct()
-                .sorted()
-                .toArray();
+        return outcomeConditions;
     }
 
     /**
@@ -104,7 +106,7 @@ public final class EventMoment {
     }
 
     private double[] odds(double[] present) {
-        int[] conditions = outcomeConditions();
+        int[] conditions = outcomeConditions;
         double[] odds = new double[event.outcomes().size()];
         for (int o = 0; o < odds.length; o++) {
             odds[o] = 1;
@@ -129,7 +131,7 @@ public final class EventMoment {
 
     /** Iterative proportional fitting of θ to the shares, θ starting as the shares. */
     private double[] solved(double[] share) {
-        int[] conditions = outcomeConditions();
+        int[] conditions = outcomeConditions;
         if (conditions.length == 0) {
             return share;
         }

@@ -3,9 +3,10 @@ package nearworld.engine.inference;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import nearworld.engine.basics.AgeCurve;
-import nearworld.engine.basics.Exponential;
 import nearworld.engine.network.EvidencePack;
 import nearworld.engine.network.EvidencePack.ConditionFactor;
 import nearworld.engine.network.EvidencePack.EventType;
@@ -26,17 +27,23 @@ public final class EvidenceFactors {
     private final ConditionStates states;
     private final int[] cards;
     private final List<Factor> factors = new ArrayList<>();
+    private final List<Exposure> exposures = new ArrayList<>();
+    private final FrailtyWeights frailtyWeights;
     private final int priorFactors;
+    private final double[][] presentAtOccurrence;
+    private final long[] earlier;
 
     /**
      * @param learned false: the prior alone, with the switches of the occurrences
      * @param moments the moment of each occurrence, in their order
+     * @param windows the moment in the middle of each window, in their order
      */
     public EvidenceFactors(
             PopulationPrior prior,
             Evidence evidence,
             ConditionStates states,
             List<EventMoment> moments,
+            List<EventMoment> windows,
             boolean learned) {
         this.prior = prior;
         this.pack = prior.pack();
@@ -46,12 +53,25 @@ public final class EvidenceFactors {
         for (int i = 0; i < pack.conditions().size(); i++) {
             cards[prior.conditionVariable(i)] = states.states(i);
         }
+        this.frailtyWeights = prior.frailtyWeights();
+        int occurrences = evidence.occurrences().size();
+        this.presentAtOccurrence = new double[occurrences][pack.conditions().size()];
+        this.earlier = new long[occurrences];
+        for (int j = 0; j < occurrences; j++) {
+            long day = evidence.occurrences().get(j).day();
+            earlier[j] = states.occurrencesBefore(day, false);
+            for (int i = 0; i < pack.conditions().size(); i++) {
+                presentAtOccurrence[j][i] = presentOn(i, day);
+            }
+        }
         addPrior(learned);
         this.priorFactors = factors.size();
         if (learned) {
             addStatements();
             addFindings();
-            evidence.windows().forEach(this::addWindow);
+            for (int w = 0; w < windows.size(); w++) {
+                addWindow(evidence.windows().get(w), windows.get(w));
+            }
             for (int j = 0; j < moments.size(); j++) {
                 addOccurrence(j, moments.get(j));
             }
@@ -61,6 +81,16 @@ public final class EvidenceFactors {
     /** The tables, those of the prior first. */
     public List<Factor> factors() {
         return factors;
+    }
+
+    /** The exposures of the observed windows. */
+    public List<Exposure> exposures() {
+        return exposures;
+    }
+
+    /** The bins of the frailty with what the occurrences say of them. */
+    public FrailtyWeights frailty() {
+        return frailtyWeights;
     }
 
     /** The number of states of each variable. */
@@ -76,6 +106,7 @@ public final class EvidenceFactors {
                 Arrays.stream(f.scope()).forEach(coupled::add);
             }
         }
+        exposures.forEach(e -> coupled.addAll(e.rates().keySet()));
         return coupled;
     }
 
@@ -91,8 +122,6 @@ public final class EvidenceFactors {
             int[] scope = prior.factorScope(i);
             add(scope, s -> noisyOr(condition, scope, s));
         }
-        double share = 1.0 / prior.frailty().length;
-        add(new int[] {prior.frailtyVariable()}, s -> share);
     }
 
     private double noisyOr(int condition, int[] scope, int[] s) {
@@ -201,55 +230,32 @@ public final class EvidenceFactors {
     }
 
     /** exp(−R/E[R]·∫λ), R at the middle of the window, by the state before all occurrences. */
-    private void addWindow(Evidence.Window window) {
-        if (window.to() <= window.from()) {
-            return;
-        }
-        EventType event = pack.events().get(window.event());
+    private void addWindow(Evidence.Window window, EventMoment moment) {
+        EventType event = moment.event();
         double fromAge = evidence.age(window.from());
         double toAge = evidence.age(window.to());
-        double middle = (fromAge + toAge) / 2;
-        EventMoment moment = new EventMoment(prior, window.event(), middle);
         double expected = event.ratePerYear().get(evidence.sex()).integral(fromAge, toAge) / moment.meanRate();
-        int[] conditions = event.conditionRates().stream()
-                .mapToInt(ConditionFactor::condition)
-                .distinct()
-                .toArray();
-        int[] behaviours = event.behaviourRates().stream()
-                .mapToInt(LevelFactor::behaviour)
-                .distinct()
-                .toArray();
-        int[] scope = new int[conditions.length + behaviours.length + 1];
-        System.arraycopy(behaviours, 0, scope, 0, behaviours.length);
-        for (int k = 0; k < conditions.length; k++) {
-            scope[behaviours.length + k] = prior.conditionVariable(conditions[k]);
+        Map<Integer, double[]> rates = new TreeMap<>();
+        for (LevelFactor r : event.behaviourRates()) {
+            int b = r.behaviour();
+            rates.computeIfAbsent(b, k -> byState(b, s -> levelRate(event, b, s)));
         }
-        scope[scope.length - 1] = prior.frailtyVariable();
-        double[] weights = Arrays.stream(conditions)
-                .mapToDouble(i -> presentAtAge(i, middle))
+        for (ConditionFactor r : event.conditionRates()) {
+            int i = r.condition();
+            double raised = conditionRate(event, i, presentAtAge(i, moment.age()));
+            int variable = prior.conditionVariable(i);
+            rates.computeIfAbsent(variable, k -> byState(variable, s -> states.before(i, s) ? raised : 1));
+        }
+        double[] byFrailty = Arrays.stream(prior.frailty())
+                .map(z -> expected * moment.frailtyRate(z))
                 .toArray();
-        double[] frailtyRates =
-                Arrays.stream(prior.frailty()).map(moment::frailtyRate).toArray();
-        add(scope, s -> {
-            double rate = frailtyRates[s[s.length - 1]];
-            for (int k = 0; k < behaviours.length; k++) {
-                if (!isPossible(behaviours[k], s[k])) {
-                    return 1;
-                }
-                rate *= levelRate(event, behaviours[k], s[k]);
-            }
-            for (int k = 0; k < conditions.length; k++) {
-                if (states.before(conditions[k], s[behaviours.length + k])) {
-                    rate *= conditionRate(event, conditions[k], weights[k]);
-                }
-            }
-            return Exponential.exp(-rate * expected);
-        });
+        exposures.add(new Exposure(byFrailty, rates));
     }
 
-    private boolean isPossible(int behaviour, int level) {
-        int known = evidence.levels().get(behaviour);
-        return known < 0 || known == level;
+    private double[] byState(int variable, java.util.function.IntToDoubleFunction value) {
+        return java.util.stream.IntStream.range(0, cards[variable])
+                .mapToDouble(value)
+                .toArray();
     }
 
     private double presentAtAge(int condition, double age) {
@@ -279,13 +285,17 @@ public final class EvidenceFactors {
         return rate;
     }
 
+    /** ω of a condition at the j-th occurrence, for this person. */
+    public double presentAtOccurrence(int condition, int j) {
+        return presentAtOccurrence[j][condition];
+    }
+
     /** The weight with which a condition acts on an occurrence: 1 where an earlier one brought it on, else ω. */
-    public double weightAt(int condition, int state, long day) {
-        long earlier = states.occurrencesBefore(day, false);
-        if ((states.switches(condition, state) & earlier) != 0) {
+    public double weightAt(int condition, int state, int j) {
+        if ((states.switches(condition, state) & earlier[j]) != 0) {
             return 1;
         }
-        return states.before(condition, state) ? presentOn(condition, day) : 0;
+        return states.before(condition, state) ? presentAtOccurrence[j][condition] : 0;
     }
 
     /** R/E[R]·P(o | u) of an occurrence. */
@@ -298,7 +308,7 @@ public final class EvidenceFactors {
                 .toArray()) {
             add(
                     new int[] {prior.conditionVariable(i)},
-                    s -> conditionRate(event, i, weightAt(i, s[0], occurrence.day())));
+                    s -> conditionRate(event, i, weightAt(i, s[0], j)));
         }
         for (int b : event.behaviourRates().stream()
                 .mapToInt(LevelFactor::behaviour)
@@ -306,14 +316,15 @@ public final class EvidenceFactors {
                 .toArray()) {
             add(new int[] {b}, s -> levelRate(event, b, s[0]));
         }
-        double[] frailty = prior.frailty();
-        add(new int[] {prior.frailtyVariable()}, s -> moment.frailtyRate(frailty[s[0]]) / moment.meanRate());
+        for (int z = 0; z < frailtyWeights.weights().length; z++) {
+            frailtyWeights.weights()[z] *= moment.frailtyRate(prior.frailty()[z]) / moment.meanRate();
+        }
         int[] conditions = moment.outcomeConditions();
         int[] scope = Arrays.stream(conditions).map(prior::conditionVariable).toArray();
         add(scope, s -> {
             double[] present = new double[conditions.length];
             for (int k = 0; k < present.length; k++) {
-                present[k] = weightAt(conditions[k], s[k], occurrence.day());
+                present[k] = weightAt(conditions[k], s[k], j);
             }
             return moment.outcomeProbabilities(present)[occurrence.outcome()];
         });

@@ -62,6 +62,15 @@ public record Factor(int[] scope, int[] cards, double[] values) {
         return stride;
     }
 
+    /** The value for the states of all variables, of which those of the scope are read. */
+    public double at(int[] stateOfVariable) {
+        int index = 0;
+        for (int i = 0; i < scope.length; i++) {
+            index = index * cards[i] + stateOfVariable[scope[i]];
+        }
+        return values[index];
+    }
+
     /** Counts up, the last place fastest; wraps to zeros. */
     static void next(int[] states, int[] cards) {
         for (int i = states.length - 1; i >= 0; i--) {

@@ -2,7 +2,9 @@ package nearworld.engine.inference;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.TreeSet;
 import org.jspecify.annotations.Nullable;
 
@@ -18,10 +20,16 @@ public final class HiddenStates {
     /** How many enumerated states cost as much as one state of the frontier, roughly: measured. */
     private static final double STATES_PER_FRONTIER = 30;
 
+    /** Branches below this part of the whole are left out: there are far fewer than a million of them. */
+    private static final double NEGLIGIBLE = 1e-18;
+
     private final ScoreGrid grid;
     private final int[] cards;
     private final List<Factor> factors = new ArrayList<>();
     private final List<Factor> scores = new ArrayList<>();
+    private final List<Exposure> exposures;
+    private final FrailtyWeights frailty;
+    private final double negligible;
     private final double constant;
     private final TreeSet<Integer> rest;
     private final List<Factor> restFactors = new ArrayList<>();
@@ -31,19 +39,28 @@ public final class HiddenStates {
     private final int[] inner;
 
     /**
+     * @param exposures of the observed windows
+     * @param frailty the bins' weights and scores
+     * @param mass what the whole is known to weigh, so that what is below rounding can be left out; 0: not known
      * @param outerWanted variables whose states the visitor needs to see
      * @param loose variables that may be summed out beforehand: seen by no factor of the evidence but their own
      */
     public HiddenStates(
             List<Factor> allFactors,
             List<Factor> allScores,
+            List<Exposure> exposures,
+            FrailtyWeights frailty,
+            double mass,
             int[] cards,
             ScoreGrid grid,
             TreeSet<Integer> outerWanted,
             TreeSet<Integer> loose) {
         this.grid = grid;
         this.cards = cards;
+        this.exposures = exposures;
+        this.frailty = frailty;
         TreeSet<Integer> all = new TreeSet<>(outerWanted);
+        exposures.forEach(e -> all.addAll(e.rates().keySet()));
         for (List<Factor> some : List.of(allFactors, allScores)) {
             for (Factor f : some) {
                 Arrays.stream(f.scope()).forEach(all::add);
@@ -53,6 +70,7 @@ public final class HiddenStates {
         split(allFactors, factors, restFactors);
         split(allScores, scores, restScores);
         this.constant = takeConstant();
+        this.negligible = mass * NEGLIGIBLE / constant;
         ScoreElimination elimination = new ScoreElimination(restFactors, restScores, cards, grid);
         this.restTable = rest.isEmpty() ? null : elimination.sumOut(elimination.order(rest));
         TreeSet<Integer> outerSet = new TreeSet<>(outerWanted);
@@ -126,7 +144,7 @@ public final class HiddenStates {
      * variables that are not outer are without meaning to the visitor.
      */
     public void forEach(StateEnumeration.Visitor visitor) {
-        StateEnumeration enumeration = new StateEnumeration(outer, inner, factors, scores, cards, grid);
+        StateEnumeration enumeration = enumeration();
         ScoreMeasure whole = new ScoreMeasure(grid);
         enumeration.forEach((states, measure) -> {
             ScoreMeasure restMeasure = restTable == null ? null : restTable.at(states);
@@ -145,37 +163,53 @@ public final class HiddenStates {
         });
     }
 
-    /** By variable and state, the integral of a function of the score over the states in which the variable has it. */
-    public double[][] marginals(StateEnumeration.Integrand integrand) {
+    private StateEnumeration enumeration() {
+        return new StateEnumeration(
+                outer, inner, factors, scores, exposures, frailty, cards, grid, restTable == null ? negligible : 0);
+    }
+
+    /** Integrates a function of the score over all states, and by variable and state over those that have it. */
+    public Marginals marginals(StateEnumeration.Integrand integrand) {
         if (restTable == null) {
-            return scaled(new StateEnumeration(outer, inner, factors, scores, cards, grid).marginals(integrand));
+            return scaled(enumeration().marginals(integrand));
         }
-        double[][] result = scaled(new StateEnumeration(outer, inner, factors, scores, cards, grid)
-                .marginals(states -> correlated(integrand.at(states), restTable.at(states))));
-        List<ScoreMeasure> seen = restDemand(integrand);
+        double[] one = new double[grid.size()];
+        Arrays.fill(one, 1);
+        StateEnumeration.Integrand given = states -> {
+            double[] function = integrand.at(states);
+            return function == null ? one : function;
+        };
+        Map<ScoreMeasure, Map<double[], double[]>> known = new IdentityHashMap<>();
+        Marginals result = scaled(enumeration().marginals(states -> {
+            ScoreMeasure restMeasure = restTable.at(states);
+            double[] function = java.util.Objects.requireNonNull(given.at(states));
+            return restMeasure == null
+                    ? new double[grid.size()]
+                    : known.computeIfAbsent(restMeasure, r -> new IdentityHashMap<>())
+                            .computeIfAbsent(function, f -> correlated(f, restMeasure));
+        }));
+        List<ScoreMeasure> demand = restDemand(given);
         for (int v : rest) {
-            result[v] = restMarginal(v, seen);
+            result.byState()[v] = restMarginal(v, demand);
         }
         return result;
     }
 
-    private double[][] scaled(double[][] marginals) {
-        for (double[] m : marginals) {
-            if (m != null) {
-                for (int s = 0; s < m.length; s++) {
-                    m[s] *= constant;
-                }
+    /** The integral over all states, and by variable and state over the states in which the variable has it. */
+    public record Marginals(double total, double[][] byState) {}
+
+    private Marginals scaled(StateEnumeration.Marginals marginals) {
+        for (double[] m : marginals.byState()) {
+            for (int s = 0; m != null && s < m.length; s++) {
+                m[s] *= constant;
             }
         }
-        return marginals;
+        return new Marginals(marginals.total() * constant, marginals.byState());
     }
 
     /** G(B) = Σ_r H(r)·F(B + r): what a function is worth at a score to which the rest is still to be added. */
-    private double[] correlated(double[] function, @Nullable ScoreMeasure restMeasure) {
+    private double[] correlated(double[] function, ScoreMeasure restMeasure) {
         double[] result = new double[grid.size()];
-        if (restMeasure == null) {
-            return result;
-        }
         for (int r = restMeasure.from; r < restMeasure.to; r++) {
             double w = restMeasure.weight[r];
             int steps = grid.wholeSteps(r);
@@ -193,12 +227,12 @@ public final class HiddenStates {
         for (int e = 0; e < table.entries().length; e++) {
             demand.add(new ScoreMeasure(grid));
         }
-        new StateEnumeration(outer, inner, factors, scores, cards, grid).forEach((states, measure) -> {
+        enumeration().forEach((states, measure) -> {
             int index = 0;
             for (int i = 0; i < table.scope().length; i++) {
                 index = index * table.cards()[i] + states[table.scope()[i]];
             }
-            double[] function = integrand.at(states);
+            double[] function = java.util.Objects.requireNonNull(integrand.at(states));
             double[] target = demand.get(index).weight;
             for (int r = 0; r < target.length; r++) {
                 int steps = grid.wholeSteps(r);

@@ -18,6 +18,7 @@ public final class Person {
     private final Scores scores;
     private final Baseline baseline;
     private final List<EventMoment> moments = new ArrayList<>();
+    private final List<EventMoment> windows = new ArrayList<>();
     private final List<@Nullable ExcessRate> excess = new ArrayList<>();
     private final Aftermath aftermath;
 
@@ -39,6 +40,10 @@ public final class Person {
                 new Baseline(table, pack.taper(), grid, evidence.age(), population.classes(), population.excess());
         for (Evidence.Occurrence o : evidence.occurrences()) {
             moments.add(new EventMoment(prior, o.event(), evidence.age(o.day())));
+        }
+        for (Evidence.Window w : evidence.windows()) {
+            double middle = (evidence.age(w.from()) + evidence.age(w.to())) / 2;
+            windows.add(new EventMoment(prior, w.event(), middle));
         }
         for (int i = 0; i < pack.conditions().size(); i++) {
             Condition condition = pack.conditions().get(i);
@@ -93,6 +98,11 @@ public final class Person {
     /** The moment of each occurrence, in their order. */
     public List<EventMoment> moments() {
         return moments;
+    }
+
+    /** The evidence as tables over the given states. */
+    public EvidenceFactors factors(ConditionStates states, boolean learned) {
+        return new EvidenceFactors(prior, evidence, states, moments, windows, learned);
     }
 
     /** The rate that each condition adds, in this person's time; null where it adds none. */

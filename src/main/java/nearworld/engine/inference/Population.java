@@ -22,7 +22,6 @@ final class Population {
         ConditionStates states = new ConditionStates(pack, List.of(), false);
         int[] cards = prior.cards();
         List<Factor> factors = new ArrayList<>(prior.factors());
-        factors.add(Factor.of(new int[] {prior.frailtyVariable()}, cards, s -> 1.0 / prior.frailty().length));
         if (smoking >= 0) {
             double share = smokingLevels.stream()
                     .mapToDouble(l -> prior.share(smoking, l))
@@ -38,7 +37,16 @@ final class Population {
             (pack.conditions().get(i).excess() == null ? loose : withExcess).add(prior.conditionVariable(i));
         }
         Map<Double, ScoreMeasure> byRate = new LinkedHashMap<>();
-        new HiddenStates(factors, scores.terms(prior, states, cards), cards, grid, withExcess, loose)
+        new HiddenStates(
+                        factors,
+                        scores.terms(prior, states, cards),
+                        List.of(),
+                        prior.frailtyWeights(),
+                        1,
+                        cards,
+                        grid,
+                        withExcess,
+                        loose)
                 .forEach((state, measure) -> {
                     double rate = 0;
                     for (int v : withExcess) {

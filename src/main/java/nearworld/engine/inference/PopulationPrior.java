@@ -17,7 +17,7 @@ import nearworld.engine.network.EvidencePack.Link;
  * The prior P(u) of a sex at an age: shares of behaviours, the noisy-OR network of the conditions with its solved leaks, the
  * bins of the frailty.
  *
- * <p>Variables are numbered: behaviours first, then conditions, then the frailty.
+ * <p>Variables are numbered: behaviours first, then conditions. The frailty is no variable of its own: its bins are taken together.
  */
 public final class PopulationPrior {
     private final EvidencePack pack;
@@ -42,7 +42,7 @@ public final class PopulationPrior {
         int conditions = pack.conditions().size();
         this.frailty = GammaBins.means(
                 pack.frailty().variance().value(), pack.frailty().points());
-        this.cards = new int[behaviours + conditions + 1];
+        this.cards = new int[behaviours + conditions];
         this.shares = new double[behaviours][];
         for (int b = 0; b < behaviours; b++) {
             cards[b] = pack.behaviours().get(b).levels().size();
@@ -51,7 +51,6 @@ public final class PopulationPrior {
             factors.add(Factor.of(new int[] {b}, cards, s -> share[s[0]]));
         }
         Arrays.fill(cards, behaviours, behaviours + conditions, 2);
-        cards[behaviours + conditions] = frailty.length;
         this.prevalences = new double[conditions];
         this.withoutLeak = new double[conditions];
         this.links = new double[conditions][];
@@ -260,8 +259,11 @@ public final class PopulationPrior {
         return shares.length + condition;
     }
 
-    public int frailtyVariable() {
-        return cards.length - 1;
+    /** The bins without any evidence. */
+    public FrailtyWeights frailtyWeights() {
+        double[] weights = new double[frailty.length];
+        Arrays.fill(weights, 1.0 / frailty.length);
+        return new FrailtyWeights(weights, Arrays.stream(frailty).map(StrictMath::log).toArray());
     }
 
     public int parentVariable(Link link) {

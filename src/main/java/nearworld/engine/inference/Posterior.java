@@ -1,6 +1,5 @@
 package nearworld.engine.inference;
 
-import java.util.List;
 import java.util.TreeSet;
 
 /** What the evidence makes of the prior: its probability, and that of each condition. */
@@ -16,7 +15,7 @@ public final class Posterior {
     public Posterior(Person person) {
         this.person = person;
         this.states = new ConditionStates(person.pack(), person.evidence().occurrences(), false);
-        this.factors = new EvidenceFactors(person.prior(), person.evidence(), states, person.moments(), true);
+        this.factors = person.factors(states, true);
         this.rows = person.scores().withPartners(person.mayBeBroughtOn()) | person.withExcess();
         TreeSet<Integer> outer = person.variables(rows);
         TreeSet<Integer> loose = person.variables(~rows);
@@ -24,25 +23,21 @@ public final class Posterior {
         this.hidden = new HiddenStates(
                 factors.factors(),
                 person.scores().terms(person.prior(), states, factors.cards()),
+                factors.exposures(),
+                factors.frailty(),
+                0,
                 factors.cards(),
                 person.baseline().grid(),
                 outer,
                 loose);
-        double[] ones = new double[person.baseline().grid().size()];
-        java.util.Arrays.fill(ones, 1);
-        double[][] marginals =
-                hidden.marginals(s -> person.aftermath().isNeutral() ? ones : aftermath(person, states, rows, s));
-        double[] z = marginals[person.prior().frailtyVariable()];
-        double total = 0;
-        for (double mass : z) {
-            total += mass;
-        }
-        this.evidence = total;
+        HiddenStates.Marginals marginals = hidden.marginals(
+                s -> person.aftermath().isNeutral() ? null : aftermath(person, states, rows, s));
+        this.evidence = marginals.total();
         this.conditions = new double[person.pack().conditions().size()];
         for (int i = 0; i < conditions.length; i++) {
-            double[] mass = marginals[person.prior().conditionVariable(i)];
+            double[] mass = marginals.byState()[person.prior().conditionVariable(i)];
             for (int s = 0; s < mass.length; s++) {
-                conditions[i] += states.before(i, s) || states.switches(i, s) != 0 ? mass[s] / total : 0;
+                conditions[i] += states.before(i, s) || states.switches(i, s) != 0 ? mass[s] / evidence : 0;
             }
         }
     }
@@ -93,8 +88,8 @@ public final class Posterior {
         return rows;
     }
 
-    /** The evidence's tables. */
-    public List<Factor> factors() {
-        return factors.factors();
+    /** The evidence's tables over {@link #states()}. */
+    public EvidenceFactors factors() {
+        return factors;
     }
 }

@@ -146,27 +146,17 @@ final class ScoreElimination {
             List<Factor> shifts) {
         double weight = 1;
         for (Factor f : some) {
-            weight *= valueAt(f, all);
+            weight *= f.at(all);
         }
         if (source == null || weight == 0) {
             return sum;
         }
         double shift = 0;
         for (Factor f : shifts) {
-            shift += valueAt(f, all);
+            shift += f.at(all);
         }
         ScoreMeasure target = sum == null ? new ScoreMeasure(grid) : sum;
         target.addShifted(source, shift, weight);
         return target;
-    }
-
-    static double valueAt(Factor f, int[] stateOfVariable) {
-        int index = 0;
-        int[] scope = f.scope();
-        int[] scopeCards = f.cards();
-        for (int i = 0; i < scope.length; i++) {
-            index = index * scopeCards[i] + stateOfVariable[scope[i]];
-        }
-        return f.values()[index];
     }
 }

@@ -34,9 +34,13 @@ public final class ScoreMeasure {
 
     /** Adds an atom. */
     public void add(double score, double mass) {
-        int first = grid.stencil(score, stencil);
+        addAt(grid.stencil(score, stencil), stencil, mass);
+    }
+
+    /** Adds a mass spread over the nodes from {@code first} on with given weights. */
+    void addAt(int first, double[] spread, double mass) {
         for (int j = 0; j < ScoreGrid.POINTS; j++) {
-            weight[first + j] += mass * stencil[j];
+            weight[first + j] += mass * spread[j];
         }
         cover(first, first + ScoreGrid.POINTS);
     }
@@ -100,6 +104,15 @@ public final class ScoreMeasure {
         return sum;
     }
 
+    /** The sum of the masses' absolute values. */
+    public double size() {
+        double sum = 0;
+        for (int n = from; n < to; n++) {
+            sum += Math.abs(weight[n]);
+        }
+        return sum;
+    }
+
     /** The integral of a function given at the nodes. */
     double integral(double[] function) {
         double sum = 0;
@@ -111,11 +124,7 @@ public final class ScoreMeasure {
 
     /** Drops both ends as far as they hold next to nothing. */
     public void trim() {
-        double size = 0;
-        for (int n = from; n < to; n++) {
-            size += Math.abs(weight[n]);
-        }
-        double spare = NEGLIGIBLE * size;
+        double spare = NEGLIGIBLE * size();
         double left = 0;
         while (from < to && (left += Math.abs(weight[from])) <= spare) {
             weight[from++] = 0;

@@ -104,7 +104,7 @@ public final class Scores {
         return wider;
     }
 
-    /** The score's parts as tables to be added up: of the state before all occurrences. */
+    /** The score's parts as tables to be added up: of the state before all occurrences, without the frailty. */
     public List<Factor> terms(PopulationPrior prior, ConditionStates states, int[] cards) {
         List<Factor> terms = new ArrayList<>();
         for (int b = 0; b < levels.length; b++) {
@@ -130,8 +130,6 @@ public final class Scores {
                 return value;
             }));
         }
-        double[] z = prior.frailty();
-        terms.add(Factor.of(new int[] {prior.frailtyVariable()}, cards, s -> StrictMath.log(z[s[0]])));
         return terms;
     }
 
