@@ -139,9 +139,8 @@ public final class Worlds {
     public WorldCurve whatIf(WhatIfPlan asked) {
         WhatIfPlan plan = effective(asked);
         boolean undoes = !plan.undoesNothing();
-        ConditionStates states = undoes
-                ? new ConditionStates(person.pack(), person.evidence().occurrences(), true)
-                : posterior.states();
+        ConditionStates states =
+                undoes ? new ConditionStates(person.pack(), person.evidence().occurrences(), true) : posterior.states();
         EvidenceFactors evidence = undoes ? person.factors(states, true) : posterior.factors();
         TwinNetwork twin = new TwinNetwork(person, plan, states, evidence);
         Thinning thinning = new Thinning(person, plan, states, evidence, twin);

@@ -306,9 +306,7 @@ public final class EvidenceFactors {
                 .mapToInt(ConditionFactor::condition)
                 .distinct()
                 .toArray()) {
-            add(
-                    new int[] {prior.conditionVariable(i)},
-                    s -> conditionRate(event, i, weightAt(i, s[0], j)));
+            add(new int[] {prior.conditionVariable(i)}, s -> conditionRate(event, i, weightAt(i, s[0], j)));
         }
         for (int b : event.behaviourRates().stream()
                 .mapToInt(LevelFactor::behaviour)

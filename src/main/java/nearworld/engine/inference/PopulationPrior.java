@@ -263,7 +263,8 @@ public final class PopulationPrior {
     public FrailtyWeights frailtyWeights() {
         double[] weights = new double[frailty.length];
         Arrays.fill(weights, 1.0 / frailty.length);
-        return new FrailtyWeights(weights, Arrays.stream(frailty).map(StrictMath::log).toArray());
+        return new FrailtyWeights(
+                weights, Arrays.stream(frailty).map(StrictMath::log).toArray());
     }
 
     public int parentVariable(Link link) {

@@ -30,8 +30,8 @@ public final class Posterior {
                 person.baseline().grid(),
                 outer,
                 loose);
-        HiddenStates.Marginals marginals = hidden.marginals(
-                s -> person.aftermath().isNeutral() ? null : aftermath(person, states, rows, s));
+        HiddenStates.Marginals marginals =
+                hidden.marginals(s -> person.aftermath().isNeutral() ? null : aftermath(person, states, rows, s));
         this.evidence = marginals.total();
         this.conditions = new double[person.pack().conditions().size()];
         for (int i = 0; i < conditions.length; i++) {
