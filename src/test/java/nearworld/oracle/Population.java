@@ -7,6 +7,7 @@ import nearworld.oracle.OraclePack.Behaviour;
 import nearworld.oracle.OraclePack.Condition;
 import nearworld.oracle.OraclePack.Event;
 import nearworld.oracle.OraclePack.Interaction;
+import nearworld.oracle.Values.Curve;
 
 /**
  * The prior over (conditions, behaviours, frailty) at the assessment's age and what follows from it for the population:
@@ -251,11 +252,13 @@ final class Population {
         return above / meanRho;
     }
 
-    /** Probability that what is there at the assessment was there at this age, where nothing dates it. */
+    /**
+     * Probability that what is there at the assessment was there at this age, where nothing dates it. At a later age it is
+     * there: so the published outcome shares come back of a coming event too.
+     */
     double omega(int i, double atAge) {
-        Condition condition = pack.conditions.get(i);
-        return Math.min(
-                1, condition.prevalence().value(atAge) / condition.prevalence().value(age));
+        Curve prevalence = pack.conditions.get(i).prevalence();
+        return atAge >= age ? 1 : Math.min(1, prevalence.value(atAge) / prevalence.value(age));
     }
 
     /** How far each condition of a mask counts at an age, in the population. */
