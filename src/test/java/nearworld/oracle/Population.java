@@ -253,12 +253,12 @@ final class Population {
     }
 
     /**
-     * Probability that what is there at the assessment was there at this age, where nothing dates it. At a later age it is
-     * there: so the published outcome shares come back of a coming event too.
+     * Probability that what is there at the assessment was there at this age, where nothing dates it; for the population
+     * the same formula at a coming event's age.
      */
     double omega(int i, double atAge) {
         Curve prevalence = pack.conditions.get(i).prevalence();
-        return atAge >= age ? 1 : Math.min(1, prevalence.value(atAge) / prevalence.value(age));
+        return Math.min(1, prevalence.value(atAge) / prevalence.value(age));
     }
 
     /** How far each condition of a mask counts at an age, in the population. */

@@ -26,12 +26,16 @@ public final class RandomPacks {
     }
 
     private final Dice dice;
+    /** Now and then numbers far beyond what is published. */
+    private final double wild;
+
     private final ObjectNode pack = JSON.createObjectNode();
     private final List<String> conditions = new ArrayList<>();
     private final List<String> levels = new ArrayList<>();
 
     private RandomPacks(Dice dice, int count) {
         this.dice = dice;
+        wild = dice.chance(0.25) ? 2.5 : 1;
         ObjectNode head = pack.putObject("pack");
         head.put("id", "random").put("version", 1).put("title", "Random").put("population", "general");
         head.putObject("taper")
@@ -39,7 +43,7 @@ public final class RandomPacks {
                 .put("pivot", dice.whole(52, 70))
                 .put("to", dice.whole(95, 115));
         pack.putObject("frailty")
-                .put("variance", Dice.round(dice.ratio(0.05, 0.8)))
+                .put("variance", Dice.round(dice.ratio(0.05, 0.8 * wild)))
                 .put("points", dice.whole(2, 7));
         for (int i = 0; i < count; i++) {
             conditions.add("condition" + (char) ('A' + i));
@@ -108,7 +112,7 @@ public final class RandomPacks {
                             .put("40", Dice.round(dice.between(0.1, 0.5)))
                             .put("75", Dice.round(dice.between(0.1, 0.5)));
                 }
-                double ratio = Dice.round(l == 0 ? 1 : dice.ratio(0.9, 2.5));
+                double ratio = Dice.round(l == 0 ? 1 : dice.ratio(0.9 / wild, 2.5 * wild));
                 if (dice.chance(0.2)) {
                     one.putObject("hazardRatio").put("value", ratio).put("atAge", dice.whole(45, 80));
                 } else {
@@ -138,7 +142,7 @@ public final class RandomPacks {
         }
         boolean excess = dice.chance(0.3);
         if (!excess || dice.chance(0.5)) {
-            double ratio = Dice.round(dice.ratio(0.9, 3.5));
+            double ratio = Dice.round(dice.ratio(0.9 / wild, 3.5 * wild));
             if (dice.chance(0.3)) {
                 node.putObject("hazardRatio").put("value", ratio).put("atAge", dice.whole(45, 80));
             } else {
@@ -167,7 +171,7 @@ public final class RandomPacks {
         }
         ObjectNode byYears = node.putObject("excessPerMille");
         byYears.put("unknown", Dice.round(dice.ratio(1, 20)));
-        byYears.put("0", Dice.round(dice.ratio(20, 100)));
+        byYears.put(dice.chance(0.8) ? "0" : "0.5", Dice.round(dice.ratio(20, 100)));
         byYears.put(dice.chance(0.5) ? "2" : "3.5", Dice.round(dice.ratio(5, 40)));
         byYears.put("10", Dice.round(dice.ratio(1, 5)));
     }
@@ -206,7 +210,7 @@ public final class RandomPacks {
             ObjectNode one = list.addObject();
             List<String> of = some(dice.chance(0.3) && conditions.size() > 2 ? 3 : 2);
             of.forEach(one.putArray("of")::add);
-            number(one, "ratio", dice.ratio(0.7, 1.4));
+            number(one, "ratio", dice.ratio(0.7 / wild, 1.4 * wild));
         }
     }
 
@@ -228,7 +232,7 @@ public final class RandomPacks {
 
     private void event(ObjectNode node) {
         if (dice.chance(0.8)) {
-            number(node, "frailtyPower", dice.between(0, 1.3));
+            number(node, "frailtyPower", dice.between(0, 1.3 * wild));
         }
         if (dice.chance(0.5)) {
             node.put("episodeDays", dice.whole(0, 40));
@@ -242,7 +246,7 @@ public final class RandomPacks {
                     .put("80", Dice.round(young * dice.between(2, 20)));
         }
         ObjectNode ratios = node.putObject("rateRatios");
-        some(dice.whole(0, 3)).forEach(c -> number(ratios, c, dice.ratio(0.7, 5)));
+        some(dice.whole(0, 3)).forEach(c -> number(ratios, c, dice.ratio(0.7 / wild, 5 * wild)));
         for (String level : levels) {
             if (dice.chance(0.3)) {
                 number(ratios, level, dice.ratio(0.8, 2.5));
@@ -272,13 +276,13 @@ public final class RandomPacks {
                 .put("80", Dice.round(share * dice.between(0.5, 2)));
         if (dice.chance(0.6)) {
             ObjectNode odds = node.putObject("oddsRatios");
-            some(dice.whole(1, 2)).forEach(c -> number(odds, c, dice.ratio(0.6, 3)));
+            some(dice.whole(1, 2)).forEach(c -> number(odds, c, dice.ratio(0.6 / wild, 3 * wild)));
         }
         if (survived && dice.chance(0.85)) {
             ObjectNode effect = node.putObject("afterEffect");
             boolean ratio = dice.chance(0.8);
             if (ratio) {
-                number(effect, "hazardRatio", dice.ratio(1, 2.5));
+                number(effect, "hazardRatio", dice.ratio(1 / wild, 2.5 * wild));
             }
             if (!ratio || dice.chance(0.3)) {
                 number(effect, "excessPerMille", dice.ratio(1, 20));
@@ -295,7 +299,7 @@ public final class RandomPacks {
             ObjectNode one = node.putObject("finding" + f);
             boolean several = dice.chance(0.3);
             if (several) {
-                several(one, some(2));
+                several(one, some(dice.whole(2, Math.min(3, conditions.size()))));
             } else {
                 one.put("of", dice.of(conditions));
                 boolean three = dice.chance(0.4);
