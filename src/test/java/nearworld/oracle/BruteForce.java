@@ -48,7 +48,9 @@ public final class BruteForce {
         String sex = root.get("applicant").get("sex").asString();
         OraclePack pack = new OraclePack(YAML.readTree(packYaml), sex);
         file = new OracleCase(root, pack);
-        population = new Population(pack, OracleTable.read(tableCsv, sex), file.age);
+        JsonNode behaviours = root.get("applicant").path("behaviours");
+        String smoking = behaviours.path("smoking").path("level").asString("");
+        population = new Population(pack, OracleTable.read(tableCsv, sex, smoking), file.age);
         person = new Person(file, population);
         evidence = new Evidence(person);
         tableSurvival = new double[population.months + 1];

@@ -139,7 +139,9 @@ final class RandomCases {
             boolean known = occurrences.stream().anyMatch(x -> x.event().equals(event));
             if (o > 0) {
                 on = on.plusDays(dice.chance(0.3) ? dice.whole(1, 40) : dice.whole(60, 1500));
-                on = on.isAfter(today) ? today : on;
+                if (on.isAfter(today)) {
+                    return;
+                }
             }
             boolean first = !known || ChronoUnit.DAYS.between(before, on) > apart;
             occurrences.add(new Occurrence(event, on, first));

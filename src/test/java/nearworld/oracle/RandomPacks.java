@@ -68,11 +68,16 @@ public final class RandomPacks {
     public static Draw draw(long seed, int most) {
         Dice dice = new Dice(seed);
         for (int attempt = 0; attempt < ATTEMPTS; attempt++) {
-            String table = RandomTables.draw(dice);
             ObjectNode pack = new RandomPacks(dice, dice.whole(2, most)).pack;
             String packText = YAML.writeValueAsString(pack);
-            String caseText =
-                    JSON.writerWithDefaultPrettyPrinter().writeValueAsString(new RandomCases(dice, pack).draw());
+            ObjectNode file = new RandomCases(dice, pack).draw();
+            String caseText = JSON.writerWithDefaultPrettyPrinter().writeValueAsString(file);
+            boolean split = file.get("applicant").get("behaviours").has("smoking") && dice.chance(0.25);
+            String table = split
+                    ? RandomTables.split(
+                            dice,
+                            Values.names(pack.get("behaviours").get("smoking").get("levels")))
+                    : RandomTables.draw(dice);
             try {
                 BruteForce.Assessment expected = BruteForce.assess(table, packText, caseText);
                 return new Draw(seed, table, packText, caseText, expected);
@@ -273,7 +278,7 @@ public final class RandomPacks {
     private void outcome(ObjectNode node, double share, boolean survived) {
         node.putObject("share")
                 .put("40", Dice.round(share * dice.between(0.5, 1)))
-                .put("80", Dice.round(share * dice.between(0.5, 2)));
+                .put("80", Dice.round(share * dice.between(0.5, 1.4)));
         if (dice.chance(0.6)) {
             ObjectNode odds = node.putObject("oddsRatios");
             some(dice.whole(1, 2)).forEach(c -> number(odds, c, dice.ratio(0.6 / wild, 3 * wild)));
@@ -304,8 +309,8 @@ public final class RandomPacks {
                 one.put("of", dice.of(conditions));
                 boolean three = dice.chance(0.4);
                 ObjectNode of = one.putObject("levels");
-                double high = Dice.round(dice.between(0.4, 0.7));
-                double low = Dice.round(dice.between(0.02, 0.2));
+                double high = dice.thousandths(0.4, 0.7);
+                double low = dice.thousandths(0.02, 0.2);
                 of.putObject("high").put("present", high).put("absent", low);
                 if (three) {
                     of.putObject("middle").put("present", 0.2).put("absent", 0.25);
@@ -325,11 +330,11 @@ public final class RandomPacks {
         ObjectNode yesPresent = yes.putObject("present");
         ObjectNode noPresent = no.putObject("present");
         for (String c : of) {
-            double p = Dice.round(dice.between(0.3, 0.9));
+            double p = dice.thousandths(0.3, 0.9);
             yesPresent.put(c, p);
             noPresent.put(c, Dice.round(1 - p));
         }
-        double absent = Dice.round(dice.between(0.02, 0.25));
+        double absent = dice.thousandths(0.02, 0.25);
         yes.put("absent", absent);
         no.put("absent", Dice.round(1 - absent));
     }
