@@ -140,8 +140,9 @@ public final class Assessor {
         Headline headline = new Headline(person.baseline().table(), age, tableCurve.survival(), file.cover());
         List<WorldResult> results = new ArrayList<>();
         results.add(headline.of("table", tableCurve, age, null));
-        WorldResult recorded = headline.of("recorded", worlds.recorded(), Double.NaN, null);
-        WorldResult removed = headline.of("eventsRemoved", worlds.eventsRemoved(), Double.NaN, null);
+        Worlds.Revealed revealed = worlds.posteriorWorlds();
+        WorldResult recorded = headline.of("recorded", revealed.recorded(), Double.NaN, null);
+        WorldResult removed = headline.of("eventsRemoved", revealed.eventsRemoved(), Double.NaN, null);
         results.add(recorded);
         results.add(removed);
         results.add(headline.of("unlearned", worlds.unlearned(), Double.NaN, null));
@@ -218,7 +219,7 @@ public final class Assessor {
         String whatIfs = "$.whatIfs[";
         WorldCurve curve = path.startsWith(whatIfs)
                 ? worlds.whatIf(resolver.plan(Integer.parseInt(path.substring(whatIfs.length(), path.indexOf(']')))))
-                : worlds.recorded();
+                : worlds.posteriorWorlds().recorded();
         Headline own = new Headline(
                 person.baseline().table(),
                 person.baseline().age(),

@@ -20,6 +20,9 @@ import org.jspecify.annotations.Nullable;
  * exp(−ρ_u h_k M − (x_u + A)·d), everything read in the middle of the month.
  */
 final class Future {
+    /** How often nodes that nobody alive is left at are dropped. */
+    private static final int MONTHS_BETWEEN_TRIMS = 12;
+
     private final Person person;
     private final Baseline baseline;
     private final WhatIfPlan plan;
@@ -112,6 +115,9 @@ final class Future {
                 lived += alive * baseline.length(k) / 2;
                 alive = 0;
             } else {
+                if (k % MONTHS_BETWEEN_TRIMS == 0) {
+                    strands.trim();
+                }
                 month(k);
             }
             survival.add(k == baseline.months() - 1 ? 0 : alive / start);

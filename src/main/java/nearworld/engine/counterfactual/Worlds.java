@@ -49,33 +49,32 @@ public final class Worlds {
         return hazard < 1e-8 ? -1 + hazard / 2 : StrictMath.expm1(-hazard) / hazard;
     }
 
-    /** The posterior with all after-effects and switches on. */
-    public WorldCurve recorded() {
-        return run(posteriorStrands(true));
-    }
+    /** The recorded world, and that of the events removed. */
+    public record Revealed(WorldCurve recorded, WorldCurve eventsRemoved) {}
 
-    /** The posterior with no after-effects and all switches off. */
-    public WorldCurve eventsRemoved() {
-        return run(posteriorStrands(false));
-    }
-
-    private WorldCurve run(Strands strands) {
-        Habits habits = new Habits(
-                person.pack(), person.scores(), person.evidence(), habits(person.evidence(), null), Map.of());
-        return new Future(person, WhatIfPlan.none(""), habits, strands).run(1, false);
-    }
-
-    private Strands posteriorStrands(boolean withEvents) {
-        Strands strands = new Strands(person.baseline().grid());
-        List<Effect> effects = withEvents ? recordedEffects() : List.of();
+    /**
+     * The posterior with all after-effects and switches on, and with no after-effects and all switches off: both from one run
+     * through the hidden states.
+     */
+    public Revealed posteriorWorlds() {
+        Strands recorded = new Strands(person.baseline().grid());
+        Strands removed = new Strands(person.baseline().grid());
+        List<Effect> effects = recordedEffects();
         posterior.hidden().forEach((s, measure) -> {
             if (!person.aftermath().isNeutral()) {
                 measure.multiply(Posterior.aftermath(person, posterior.states(), posterior.rows(), s));
             }
-            add(strands, posterior.states(), posterior.rows(), s, measure, withEvents, effects);
+            add(recorded, posterior.states(), posterior.rows(), s, measure, true, effects);
+            add(removed, posterior.states(), posterior.rows(), s, measure, false, List.of());
         });
+        return new Revealed(run(recorded), run(removed));
+    }
+
+    private WorldCurve run(Strands strands) {
         strands.trim();
-        return strands;
+        Habits habits = new Habits(
+                person.pack(), person.scores(), person.evidence(), habits(person.evidence(), null), Map.of());
+        return new Future(person, WhatIfPlan.none(""), habits, strands).run(1, false);
     }
 
     private void add(
