@@ -2,12 +2,14 @@ package nearworld.app.forms;
 
 import java.time.LocalDate;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.IntStream;
 import nearworld.engine.basics.Fault;
 import tools.jackson.databind.node.ArrayNode;
 import tools.jackson.databind.node.JsonNodeFactory;
@@ -136,9 +138,11 @@ final class CaseDraft {
             require(form.bornOn(), core.at("bornOn"));
         }
         ObjectNode behaviours = applicant.putObject("behaviours");
-        for (int i = 0; i < form.behaviours().size(); i++) {
-            behaviour(behaviours, form.behaviours().get(i), "behaviours[" + i + "]");
-        }
+        // By name, as canonical JSON has them: what is recorded then reads back in the same order.
+        IntStream.range(0, form.behaviours().size())
+                .boxed()
+                .sorted(Comparator.comparing(i -> form.behaviours().get(i).behaviour()))
+                .forEach(i -> behaviour(behaviours, form.behaviours().get(i), "behaviours[" + i + "]"));
     }
 
     private void behaviour(ObjectNode behaviours, PersonForm.BehaviourRow row, String field) {
