@@ -18,6 +18,8 @@ public record TestDatabase(String url, String ownerPassword, String appPassword)
         return Map.of(
                 "nearworld.data",
                 "target/test-data",
+                "nearworld.first-admin",
+                "first.admin",
                 "nearworld.database.url",
                 url,
                 "nearworld.database.user",
