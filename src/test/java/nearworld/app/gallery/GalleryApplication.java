@@ -8,6 +8,7 @@ import org.springframework.boot.autoconfigure.context.MessageSourceAutoConfigura
 import org.springframework.boot.autoconfigure.context.PropertyPlaceholderAutoConfiguration;
 import org.springframework.boot.http.converter.autoconfigure.HttpMessageConvertersAutoConfiguration;
 import org.springframework.boot.servlet.autoconfigure.HttpEncodingAutoConfiguration;
+import org.springframework.boot.test.context.TestComponent;
 import org.springframework.boot.thymeleaf.autoconfigure.ThymeleafAutoConfiguration;
 import org.springframework.boot.tomcat.autoconfigure.servlet.TomcatServletWebServerAutoConfiguration;
 import org.springframework.boot.webmvc.autoconfigure.DispatcherServletAutoConfiguration;
@@ -28,6 +29,7 @@ import org.springframework.context.annotation.ComponentScan;
     WebMvcAutoConfiguration.class
 })
 @ComponentScan({"nearworld.app.gallery", "nearworld.app.results", "nearworld.app.fields", "nearworld.app.web"})
+@TestComponent
 class GalleryApplication {
     /** The policy under which the pages live in the application, too. */
     static final String POLICY = "default-src 'none'; style-src 'self'; script-src 'self'; img-src 'self' data:;"

@@ -13,6 +13,7 @@ import nearworld.app.trail.TrailPage;
 import nearworld.app.trail.Verification;
 import nearworld.engine.basics.Fault;
 import org.jspecify.annotations.Nullable;
+import org.springframework.boot.test.context.TestComponent;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -21,6 +22,7 @@ import org.springframework.web.bind.annotation.PathVariable;
 
 /** Serves every page in every state from samples. */
 @Controller
+@TestComponent
 class GalleryController {
     private final ResultViews results;
 
