@@ -5,7 +5,6 @@ import static org.springframework.security.test.web.servlet.request.SecurityMock
 import static org.springframework.security.test.web.servlet.response.SecurityMockMvcResultMatchers.authenticated;
 import static org.springframework.security.test.web.servlet.response.SecurityMockMvcResultMatchers.unauthenticated;
 import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.get;
-import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.cookie;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.header;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.redirectedUrl;
 import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
@@ -121,14 +120,6 @@ class SignInIT {
                 .andExpect(header().string("Referrer-Policy", "same-origin"))
                 .andExpect(header().string("Strict-Transport-Security", "max-age=31536000 ; includeSubDomains"))
                 .andExpect(header().string("Cache-Control", "no-cache, no-store, max-age=0, must-revalidate"));
-    }
-
-    @Test
-    void theCookieIsOutOfReachOfScriptsAndOtherSites() throws Exception {
-        mvc.perform(get("/cases").secure(true))
-                .andExpect(cookie().httpOnly("SESSION", true))
-                .andExpect(cookie().secure("SESSION", true))
-                .andExpect(cookie().sameSite("SESSION", "Lax"));
     }
 
     /** The row outlives the server process, so that a restart signs nobody out. */
