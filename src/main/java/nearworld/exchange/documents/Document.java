@@ -13,7 +13,7 @@ import tools.jackson.databind.JsonNode;
 public record Document(@Nullable JsonNode root, FaultList faults) {
     /** A tree that did not come from a text. */
     public static Document of(JsonNode root) {
-        return new Document(root, new FaultList());
+        return GivenTree.document(root);
     }
 
     /** The root as the place where reading starts. */

@@ -10,8 +10,11 @@ import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.math.BigDecimal;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Set;
+import java.util.stream.Collectors;
 import nearworld.engine.basics.Fault;
 import nearworld.exchange.faults.FaultList;
 import nearworld.exchange.faults.JsonPath;
@@ -27,6 +30,7 @@ public enum FormatSchema {
     CASE("case-1"),
     RESULT("result-1");
 
+    private static final String WRONG_TYPE = "wrongType";
     private static final int LONGEST_VALUE = 120;
 
     private final String id;
@@ -52,9 +56,16 @@ public enum FormatSchema {
 
     /** Validates a tree; each broken rule becomes a fault. */
     public void validate(JsonNode root, FaultList faults) {
-        for (Error error : schema().validate(root)) {
-            faults.add(fault(error));
-        }
+        List<Fault> found =
+                schema().validate(root).stream().map(FormatSchema::fault).toList();
+        Set<String> mistyped = found.stream()
+                .filter(f -> f.code().equals(WRONG_TYPE))
+                .map(Fault::path)
+                .collect(Collectors.toSet());
+        // What is of the wrong type breaks other rules as well; only the type is worth reporting.
+        found.stream()
+                .filter(f -> f.code().equals(WRONG_TYPE) || !mistyped.contains(f.path()))
+                .forEach(faults::add);
         faults.endStage();
     }
 
@@ -101,7 +112,7 @@ public enum FormatSchema {
 
     private static String code(String keyword, Error error) {
         return switch (keyword) {
-            case "type" -> "wrongType";
+            case "type" -> WRONG_TYPE;
             case "enum", "const" -> "notAllowed";
             case "minimum" -> "belowMinimum";
             case "exclusiveMinimum" -> "notAbove";
@@ -112,6 +123,7 @@ public enum FormatSchema {
             case "minItems", "minProperties" -> "tooFew";
             case "maxItems", "maxProperties" -> "tooMany";
             case "uniqueItems" -> "repeatedItem";
+            case "not" -> "reservedName";
             case "pattern" -> pattern(String.valueOf(error.getSchemaLocation()));
             default -> "notInFormat";
         };

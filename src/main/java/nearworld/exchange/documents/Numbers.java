@@ -12,9 +12,19 @@ import tools.jackson.databind.node.JsonNodeFactory;
 final class Numbers {
     private static final JsonNodeFactory NODES = JsonNodeFactory.instance;
     private static final int LONGEST = 60;
-    private static final int LONGEST_LONG = 18;
+    private static final int LONGEST_LONG = 15;
+    /** Below it whole numbers are told apart by a double; no quantity of ours comes near. */
+    private static final double GREATEST = 1e15;
 
     private Numbers() {}
+
+    static boolean isWithinBounds(double value) {
+        return Math.abs(value) <= GREATEST;
+    }
+
+    static Fault outOfBounds(String value, String path) {
+        return Fault.of("numberTooLarge", path, "value", value, "bound", BigDecimal.valueOf(GREATEST).toBigInteger());
+    }
 
     /** @param text a decimal number; a null node where a fault was added */
     static JsonNode of(String text, String path, Place place, FaultList faults) {
@@ -26,6 +36,10 @@ final class Numbers {
         boolean zero = text.chars().takeWhile(c -> c != 'e' && c != 'E').noneMatch(c -> c >= '1' && c <= '9');
         if (!Double.isFinite(value) || (value == 0 && !zero)) {
             faults.add(Fault.of("notFinite", path, "value", text), place);
+            return NODES.nullNode();
+        }
+        if (!isWithinBounds(value)) {
+            faults.add(outOfBounds(text, path), place);
             return NODES.nullNode();
         }
         boolean whole = text.chars().allMatch(c -> (c >= '0' && c <= '9') || c == '-' || c == '+');

@@ -46,8 +46,20 @@ final class FindingRules {
             faults.add(Fault.of(
                     "levelsOfSeveral", levels.path(), "found", levels.names().size()));
         }
+        List<String> given = new ArrayList<>();
         for (String l : levels.names()) {
-            present(levels.at(l).at("present"), of);
+            Spot level = levels.at(l);
+            // The second level of several conditions is what the first one leaves.
+            if (of.size() <= 1 || given.isEmpty() || level.has("present") || level.has("absent")) {
+                given.add(l);
+                required(level, "present");
+                required(level, "absent");
+                present(level.at("present"), of);
+            }
+        }
+        if (of.size() > 1 && given.size() == 1 && levels.names().size() == 2) {
+            combination(levels.at(given.get(0)), of);
+            return;
         }
         for (String condition : of) {
             sum(levels, l -> ShareCurves.value(presentOf(levels.at(l).at("present"), condition)), "present", condition);
@@ -55,6 +67,12 @@ final class FindingRules {
         sum(levels, l -> ShareCurves.value(levels.at(l).at("absent")), "absent", "");
         if (of.size() > 1 && levels.names().size() == 2) {
             combination(levels.at(levels.names().get(0)), of);
+        }
+    }
+
+    private void required(Spot level, String field) {
+        if (level.isObject() && !level.has(field)) {
+            faults.add(Fault.of("missingField", level.at(field).path(), "field", field));
         }
     }
 

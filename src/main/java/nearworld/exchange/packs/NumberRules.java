@@ -39,7 +39,7 @@ final class NumberRules {
     private void walk(Spot spot) {
         Map<Double, String> ages = new HashMap<>();
         for (String name : spot.names()) {
-            if (AGE.matcher(name).matches()) {
+            if (isAge(name)) {
                 String same = ages.putIfAbsent(Double.valueOf(name), name);
                 if (same != null) {
                     faults.add(Fault.of("repeatedAge", spot.at(name).path(), "value", name, "first", same));
@@ -68,6 +68,11 @@ final class NumberRules {
             faults.add(Fault.of(
                     "atAgeBeyondTaper", spot.at("atAge").path(), "value", plain(atAge), "bound", plain(taperEnd)));
         }
+    }
+
+    /** True for a name that is an age. */
+    static boolean isAge(String name) {
+        return AGE.matcher(name).matches();
     }
 
     static String plain(double value) {

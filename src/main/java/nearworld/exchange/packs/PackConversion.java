@@ -110,21 +110,27 @@ final class PackConversion {
         List<String> conditions = of.isString()
                 ? List.of(of.asString())
                 : of.values().stream().map(JsonNode::asString).toList();
-        List<EvidencePack.FindingLevel> levels = each(node.path("levels"), (l, n) -> level(l, n, conditions));
-        if (conditions.size() > 1) {
-            EvidencePack.FindingLevel first = levels.get(0);
-            EvidencePack.FindingLevel second = new EvidencePack.FindingLevel(
-                    levels.get(1).id(),
-                    first.present().stream().map(Quantities::complement).toList(),
-                    Quantities.complement(first.absent()));
-            levels = List.of(first, second);
-        }
+        List<EvidencePack.FindingLevel> levels =
+                conditions.size() > 1 ? firstAndRest(node.path("levels"), conditions) : each(node.path("levels"), (l, n) -> level(l, n, conditions));
         return new EvidencePack.Finding(
                 id,
                 conditions.stream().map(names::condition).toList(),
                 levels,
                 numberOrNull(node.path("cost")),
                 numberOrNull(node.path("days")));
+    }
+
+    /** The two levels of a finding of several conditions: the second is what the first one leaves. */
+    private static List<EvidencePack.FindingLevel> firstAndRest(JsonNode levels, List<String> conditions) {
+        List<String> ids = new ArrayList<>();
+        levels.properties().forEach(e -> ids.add(e.getKey()));
+        EvidencePack.FindingLevel first = level(ids.get(0), levels.path(ids.get(0)), conditions);
+        return List.of(
+                first,
+                new EvidencePack.FindingLevel(
+                        ids.get(1),
+                        first.present().stream().map(Quantities::complement).toList(),
+                        Quantities.complement(first.absent())));
     }
 
     private static EvidencePack.FindingLevel level(String id, JsonNode node, List<String> conditions) {

@@ -22,7 +22,7 @@ final class ShareCurves {
         Map<Double, Double> points = new TreeMap<>();
         for (String age : own.names()) {
             Double value = value(own.at(age));
-            if (value == null || !Character.isDigit(age.charAt(0))) {
+            if (value == null || !NumberRules.isAge(age)) {
                 return null;
             }
             points.put(Double.valueOf(age), value);
