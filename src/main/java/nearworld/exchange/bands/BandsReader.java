@@ -51,8 +51,8 @@ public final class BandsReader {
             return Reading.refused(document.faults().sorted());
         }
         JsonNode head = root.path("bands");
-        return Reading.accepted(new Bands(
-                head.path("id").asString(), head.path("version").intValue(), root, Sha256.hex(bytes)));
+        return Reading.accepted(
+                new Bands(head.path("id").asString(), head.path("version").intValue(), root, Sha256.hex(bytes)));
     }
 
     private void check(Spot root) {

@@ -23,7 +23,13 @@ final class Numbers {
     }
 
     static Fault outOfBounds(String value, String path) {
-        return Fault.of("numberTooLarge", path, "value", value, "bound", BigDecimal.valueOf(GREATEST).toBigInteger());
+        return Fault.of(
+                "numberTooLarge",
+                path,
+                "value",
+                value,
+                "bound",
+                BigDecimal.valueOf(GREATEST).toBigInteger());
     }
 
     /** @param text a decimal number; a null node where a fault was added */

@@ -110,8 +110,9 @@ final class PackConversion {
         List<String> conditions = of.isString()
                 ? List.of(of.asString())
                 : of.values().stream().map(JsonNode::asString).toList();
-        List<EvidencePack.FindingLevel> levels =
-                conditions.size() > 1 ? firstAndRest(node.path("levels"), conditions) : each(node.path("levels"), (l, n) -> level(l, n, conditions));
+        List<EvidencePack.FindingLevel> levels = conditions.size() > 1
+                ? firstAndRest(node.path("levels"), conditions)
+                : each(node.path("levels"), (l, n) -> level(l, n, conditions));
         return new EvidencePack.Finding(
                 id,
                 conditions.stream().map(names::condition).toList(),

@@ -13,8 +13,7 @@ import nearworld.exchange.packs.PackReader;
 import org.junit.jupiter.api.Test;
 
 class BandsReaderTest {
-    private static final String GOOD =
-            """
+    private static final String GOOD = """
             bands: {id: house, version: 1}
             term:
               - {upToRatio: 1.30, terms: standard}
@@ -55,7 +54,8 @@ class BandsReaderTest {
         assertThat(faults(GOOD.replace("{terms: decline}", "{terms: decline, firstYears: 5}")))
                 .containsExactly("$.term[3].firstYears notOfTerms");
         assertThat(faults(GOOD.replace("terms: rated", "terms: loaded"))).containsExactly("$.term[1].terms notAllowed");
-        assertThat(faults(GOOD.replace("upToRatio: 4.00", "upToRatio: -4"))).containsExactly("$.term[1].upToRatio notAbove");
+        assertThat(faults(GOOD.replace("upToRatio: 4.00", "upToRatio: -4")))
+                .containsExactly("$.term[1].upToRatio notAbove");
         assertThat(faults(GOOD.replace("stepPercent", "step"))).contains("$.term[1].step unknownField");
     }
 

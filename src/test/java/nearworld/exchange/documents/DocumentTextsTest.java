@@ -36,7 +36,8 @@ class DocumentTextsTest {
             value = {
                 "~|NULL", "null|NULL", "true|BOOLEAN", "False|BOOLEAN", "0|NUMBER", "0o7|NUMBER", "0x3A|NUMBER",
                 "-19|NUMBER", "+12e03|NUMBER", "-2E+05|NUMBER", "0.|NUMBER", ".5|NUMBER", "yes|STRING", "no|STRING",
-                "on|STRING", "off|STRING", "y|STRING", "1_000|STRING", "12:30:45|STRING", "2026-12-01|STRING", "1e|STRING"
+                "on|STRING", "off|STRING", "y|STRING", "1_000|STRING", "12:30:45|STRING", "2026-12-01|STRING",
+                        "1e|STRING"
             },
             delimiter = '|')
     void typesOfYamlScalars(String text, String type) {
@@ -131,14 +132,25 @@ class DocumentTextsTest {
     void refusesDeepNesting() {
         assertThat(codes(json("[".repeat(5000)))).singleElement().asString().endsWith(" $ tooDeep");
         assertThat(codes(yaml("[".repeat(5000)))).singleElement().asString().endsWith(" $ tooDeep");
-        assertThat(codes(yaml("- ".repeat(4000) + "a"))).singleElement().asString().endsWith(" $ tooDeep");
+        assertThat(codes(yaml("- ".repeat(4000) + "a")))
+                .singleElement()
+                .asString()
+                .endsWith(" $ tooDeep");
         assertThat(codes(json("[".repeat(30) + "]".repeat(30)))).isEmpty();
     }
 
     @Test
     void saysWhereTheSyntaxBreaks() {
-        assertThat(codes(json("{\"a\": 1,\n  \"b\" 2}"))).singleElement().asString().startsWith("2:").endsWith(" $ notJson");
-        assertThat(codes(yaml("a: 1\nb: [1, 2\nc: 3\n"))).singleElement().asString().startsWith("3:").endsWith(" $ notYaml");
+        assertThat(codes(json("{\"a\": 1,\n  \"b\" 2}")))
+                .singleElement()
+                .asString()
+                .startsWith("2:")
+                .endsWith(" $ notJson");
+        assertThat(codes(yaml("a: 1\nb: [1, 2\nc: 3\n")))
+                .singleElement()
+                .asString()
+                .startsWith("3:")
+                .endsWith(" $ notYaml");
         assertThat(codes(json("{\"a\": 1} x"))).singleElement().asString().endsWith("notJson");
         assertThat(codes(json("{\"a\": 1} {}"))).containsExactly("1:10 $ trailingContent");
         assertThat(codes(json("  "))).containsExactly("1:1 $ emptyDocument");
@@ -163,7 +175,8 @@ class DocumentTextsTest {
 
     @Test
     void refusesWhatIsTooLarge() {
-        LocatedFault fault = YamlText.read(new byte[MOST + 1], MOST).faults().sorted().get(0);
+        LocatedFault fault =
+                YamlText.read(new byte[MOST + 1], MOST).faults().sorted().get(0);
 
         assertThat(fault.fault().code()).isEqualTo("tooLarge");
         assertThat(fault.fault().values()).containsEntry("bound", "10000");

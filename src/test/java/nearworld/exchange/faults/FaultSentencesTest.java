@@ -31,7 +31,8 @@ class FaultSentencesTest {
         Set<String> codes = new TreeSet<>();
         for (String part : List.of("engine", "exchange", "cli")) {
             try (Stream<Path> files = Files.walk(SOURCES.resolve(part))) {
-                for (Path file : files.filter(f -> f.toString().endsWith(".java")).toList()) {
+                for (Path file :
+                        files.filter(f -> f.toString().endsWith(".java")).toList()) {
                     String text = Files.readString(file);
                     collect(EMITTED, text, codes);
                     collect(LOOKED_UP, text, codes);
@@ -67,7 +68,9 @@ class FaultSentencesTest {
     void everyCodeHasItsSentenceInBothLanguages() throws IOException {
         Set<String> codes = emitted();
 
-        assertThat(codes).contains("unknownField", "dateBeforeBirth", "linksExceedPrevalence").hasSizeGreaterThan(80);
+        assertThat(codes)
+                .contains("unknownField", "dateBeforeBirth", "linksExceedPrevalence")
+                .hasSizeGreaterThan(80);
         for (String file : List.of("faults.properties", "faults_de.properties")) {
             Set<String> known = new TreeSet<>();
             words(file).stringPropertyNames().forEach(k -> known.add(k.substring("fault.".length())));
@@ -96,7 +99,8 @@ class FaultSentencesTest {
     void putsTheValuesIntoTheSentence() {
         Fault fault = new Fault("belowMinimum", "$.cover.years", Map.of("value", "-3", "bound", "1"));
 
-        assertThat(new FaultSentences(Locale.ENGLISH).sentence(fault)).isEqualTo("The value is -3; it must be at least 1.");
+        assertThat(new FaultSentences(Locale.ENGLISH).sentence(fault))
+                .isEqualTo("The value is -3; it must be at least 1.");
         assertThat(new FaultSentences(Locale.GERMAN).sentence(fault))
                 .isEqualTo("Der Wert ist -3; er muss mindestens 1 sein.");
         assertThat(new FaultSentences(Locale.ENGLISH).sentence(Fault.of("neverHeardOf", "$.x", "value", 1)))
