@@ -91,11 +91,20 @@ final class HistoryBand {
                 ? lifeline.flags().size()
                 : row.lane().marks().size();
         String counted = row.title() + (count > row.labels().size() ? " · " + count : "");
-        String fitted = Lettering.fit(counted, TITLE_SIZE, room);
         if (format.wordsBeside()) {
-            svg.text(format.left() - 12, row.titleY(), TITLE_SIZE, Ink.TEXT, "end", fitted);
+            List<String> lines = Lettering.wrap(counted, TITLE_SIZE, room);
+            for (int i = 0; i < lines.size(); i++) {
+                double y = row.titleY() - (lines.size() - 1) * 7.0 + i * 14;
+                svg.text(format.left() - 12, y, TITLE_SIZE, Ink.TEXT, "end", lines.get(i));
+            }
         } else {
-            svg.text(format.textLeft(), row.titleY(), TITLE_SIZE, Ink.TEXT, "start", fitted);
+            svg.text(
+                    format.textLeft(),
+                    row.titleY(),
+                    TITLE_SIZE,
+                    Ink.TEXT,
+                    "start",
+                    Lettering.fit(counted, TITLE_SIZE, room));
         }
     }
 

@@ -184,7 +184,9 @@ final class WorldStrips {
         svg.text(left, y, TITLE_SIZE, Ink.TEXT, "start", title, true);
         svg.text(right, y, 15, Ink.TEXT, "end", strip.figure(), true);
         double note = right - left - Lettering.width(strip.figureNote(), NOTE_SIZE) - 10;
-        svg.text(left, y + 15, NOTE_SIZE, Ink.MUTED, "start", Lettering.fit(strip.note(), NOTE_SIZE, note));
+        if (Lettering.width(strip.note(), NOTE_SIZE) <= note) {
+            svg.text(left, y + 15, NOTE_SIZE, Ink.MUTED, "start", strip.note());
+        }
         svg.text(right, y + 15, NOTE_SIZE, Ink.MUTED, "end", strip.figureNote());
     }
 

@@ -1,9 +1,12 @@
 package nearworld.app.results;
 
 import java.time.LocalDate;
+import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import nearworld.app.artefacts.PackChoices;
 import nearworld.app.assessments.Calculated;
 import nearworld.app.drawing.Lifeline;
@@ -30,8 +33,28 @@ final class HistoryWords {
         this.locale = locale;
     }
 
+    /** Lanes with occurrences first; watched types in which nothing happened share a lane for each window. */
     List<Lifeline.Lane> lanes() {
-        return calculated.file().history().stream().map(this::lane).toList();
+        List<Lifeline.Lane> lanes = new ArrayList<>();
+        Map<Lifeline.Lane, List<String>> quiet = new LinkedHashMap<>();
+        for (CaseFile.History history : calculated.file().history()) {
+            Lifeline.Lane lane = lane(history);
+            if (lane.marks().isEmpty()) {
+                Lifeline.Lane window = new Lifeline.Lane("", lane.from(), lane.to(), List.of());
+                quiet.computeIfAbsent(window, w -> new ArrayList<>()).add(lane.title());
+            } else {
+                lanes.add(lane);
+            }
+        }
+        quiet.forEach((window, titles) ->
+                lanes.add(new Lifeline.Lane(noneHappened(titles), window.from(), window.to(), List.of())));
+        return lanes;
+    }
+
+    private String noneHappened(List<String> titles) {
+        return titles.size() == 1
+                ? words.getMessage("lifeline.noneHappenedOne", titles.toArray(), locale)
+                : words.getMessage("lifeline.noneHappened", new Object[] {titles.size()}, locale);
     }
 
     private Lifeline.Lane lane(CaseFile.History history) {

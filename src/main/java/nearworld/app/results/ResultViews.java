@@ -41,8 +41,12 @@ public class ResultViews {
                 drawings.lifeline(history, told),
                 drawings.curves(),
                 told,
-                part(sentences, Sentences.revealed(result), result.revealed().ratio(), locale),
-                part(sentences, Sentences.caused(result), result.caused().ratio(), locale),
+                part(
+                        sentences,
+                        YearsSplit.of(result).revealed(),
+                        result.revealed().ratio(),
+                        locale),
+                part(sentences, YearsSplit.of(result).caused(), result.caused().ratio(), locale),
                 worlds.stream()
                         .map(w -> row(w, result, horizons, drawings, locale))
                         .toList(),

@@ -32,41 +32,25 @@ final class Sentences {
                 figures.bareYears(recorded.median(), locale),
                 figures.bareYears(result.age() + recorded.median(), locale),
                 figures.bareYears(table.median(), locale)));
-        sentences.add(split(revealed(result), caused(result)));
+        sentences.add(split(YearsSplit.of(result)));
         return sentences;
     }
 
-    /** Years of expectation that the history reveals; negative: lost. */
-    static double revealed(AssessmentResult result) {
-        return result.world("eventsRemoved").expectation()
-                - result.world("table").expectation();
-    }
-
-    /** Years of expectation that the events caused; negative: lost. */
-    static double caused(AssessmentResult result) {
-        return result.world("recorded").expectation()
-                - result.world("eventsRemoved").expectation();
-    }
-
-    private String split(double revealed, double caused) {
-        double total = Figures.round(revealed + caused, 1);
-        boolean nothing = Math.abs(revealed) < NOTHING && Math.abs(caused) < NOTHING;
-        if (nothing) {
+    private String split(YearsSplit split) {
+        if (split.isNothing()) {
             return say("sentence.asTable");
         }
-        // The smaller part is rounded, the larger takes the rest, so that the parts of the sentence add up.
-        boolean causedIsSmaller = Math.abs(caused) < Math.abs(revealed);
-        double small = Figures.round(causedIsSmaller ? caused : revealed, 1);
-        double large = Figures.round(total - small, 1);
-        double first = causedIsSmaller ? large : small;
-        double second = causedIsSmaller ? small : large;
-        if (total < 0 && first <= 0 && second <= 0) {
-            return say("sentence.lost", bare(total), bare(first), bare(second));
+        if (split.isLoss()) {
+            return say("sentence.lost", bare(split.total()), bare(split.revealed()), bare(split.caused()));
         }
-        if (total > 0 && first >= 0 && second >= 0) {
-            return say("sentence.gained", bare(total), bare(first), bare(second));
+        if (split.isGain()) {
+            return say("sentence.gained", bare(split.total()), bare(split.revealed()), bare(split.caused()));
         }
-        return say("sentence.mixed", signed(total), signed(first), signed(second));
+        return say(
+                "sentence.mixed",
+                fewerOrMore(split.total()),
+                fewerOrMore(split.revealed()),
+                fewerOrMore(split.caused()));
     }
 
     /** "6.1 years fewer", "0.3 years more", or "no difference". */
@@ -79,10 +63,6 @@ final class Sentences {
 
     private String bare(double years) {
         return figures.bareYears(Math.abs(years), locale);
-    }
-
-    private String signed(double years) {
-        return fewerOrMore(years);
     }
 
     private String say(String key, Object... values) {
