@@ -48,7 +48,9 @@ public final class BruteForce {
         String sex = root.get("applicant").get("sex").asString();
         OraclePack pack = new OraclePack(YAML.readTree(packYaml), sex);
         file = new OracleCase(root, pack);
-        population = new Population(pack, OracleTable.read(tableCsv, sex), file.age);
+        JsonNode behaviours = root.get("applicant").path("behaviours");
+        String smoking = behaviours.path("smoking").path("level").asString("");
+        population = new Population(pack, OracleTable.read(tableCsv, sex, smoking), file.age);
         person = new Person(file, population);
         evidence = new Evidence(person);
         tableSurvival = new double[population.months + 1];
@@ -56,11 +58,18 @@ public final class BruteForce {
             double end = Math.min(population.table.end(), file.age + k / 12.0);
             tableSurvival[k] = population.table.survival(file.age, end);
         }
+        atTheEnd(tableSurvival);
     }
 
     /** Assesses a case of a living person; throws {@link IllegalArgumentException} where the pack does not fit. */
     public static Assessment assess(String tableCsv, String packYaml, String caseJson) {
         return new BruteForce(tableCsv, packYaml, caseJson).assess();
+    }
+
+    /** Nobody is counted beyond the table's end, which falls within the last month. */
+    private static double[] atTheEnd(double[] survival) {
+        survival[survival.length - 1] = 0;
+        return survival;
     }
 
     private Assessment assess() {
@@ -73,7 +82,7 @@ public final class BruteForce {
             WhatIf whatIf = new WhatIf(node, file, population.pack);
             Counterfactual then = new Counterfactual(evidence, person, whatIf);
             Projection projection = new Projection(then.cohorts(), person, whatIf, true);
-            add("whatIf:" + whatIf.name, projection.survival, projection.expectation, then.aliveToday());
+            add("whatIf:" + whatIf.name, atTheEnd(projection.survival), projection.expectation, then.aliveToday());
         }
         List<Belief> conditions = new ArrayList<>();
         double[] posterior = evidence.conditions();
@@ -88,7 +97,8 @@ public final class BruteForce {
     private double tableExpectation() {
         double sum = 0;
         for (int k = 0; k < population.months; k++) {
-            double dying = Math.log(tableSurvival[k] / tableSurvival[k + 1]);
+            double start = file.age + k / 12.0;
+            double dying = -Math.log(population.table.survival(start, start + population.monthLength[k]));
             double lived = Double.isInfinite(dying) ? 0.5 : dying < 1e-9 ? 1 - dying / 2 : -Math.expm1(-dying) / dying;
             sum += tableSurvival[k] * lived * population.monthLength[k];
         }
@@ -134,7 +144,7 @@ public final class BruteForce {
     }
 
     private void add(String id, Projection projection) {
-        add(id, projection.survival, projection.expectation, null);
+        add(id, atTheEnd(projection.survival), projection.expectation, null);
     }
 
     private void add(String id, double[] curve, double expectation, @Nullable Double aliveToday) {

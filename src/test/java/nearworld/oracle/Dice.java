@@ -33,6 +33,11 @@ final class Dice {
         return choices.get(random.nextInt(choices.size()));
     }
 
+    /** A probability in whole thousandths, so that it and what is left of 1 add up. */
+    double thousandths(double low, double high) {
+        return Math.round(1000 * between(low, high)) / 1000.0;
+    }
+
     /** To five digits, so that a failing example can be read. */
     static double round(double value) {
         return new java.math.BigDecimal(value)

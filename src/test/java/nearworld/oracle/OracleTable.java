@@ -1,10 +1,11 @@
 package nearworld.oracle;
 
 import java.util.HashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
 
-/** One sex of a mortality table in CSV: q by attained age, without classes, select rows or improvement. */
+/** One sex and smoking class of a mortality table in CSV: q by attained age, without select rows or improvement. */
 final class OracleTable {
     private static final double LAST_AGE = 120;
 
@@ -13,8 +14,14 @@ final class OracleTable {
     private final String withinYear;
     private final double shift;
     private final double end;
+    /** The levels of smoking that these rates speak of; empty for all. */
+    private final List<String> smoking;
 
-    private OracleTable(TreeMap<Integer, Double> rows, String ageBasis, String withinYear) {
+    private OracleTable(TreeMap<Integer, Double> rows, String ageBasis, String withinYear, List<String> smoking) {
+        if (rows.isEmpty()) {
+            throw new IllegalArgumentException("the table has no rates for this sex and class of smoking");
+        }
+        this.smoking = smoking;
         this.first = rows.firstKey();
         boolean closed = rows.lastEntry().getValue() >= 1;
         int last = closed ? rows.lastKey() : Math.max(rows.lastKey(), 119);
@@ -27,20 +34,51 @@ final class OracleTable {
         this.end = Math.min(LAST_AGE, closed ? last + 1 + shift : LAST_AGE);
     }
 
-    static OracleTable read(String csv, String sex) {
+    /** Reads the rates of a sex and, where the table is split, of the class of a level of smoking. */
+    static OracleTable read(String csv, String sex, String level) {
         Map<String, String> head = new HashMap<>();
+        Map<String, List<String>> classes = new HashMap<>();
         TreeMap<Integer, Double> rows = new TreeMap<>();
+        List<String> smoking = List.of();
         for (String line : csv.lines().toList()) {
+            String[] cells = line.split(",");
             if (line.startsWith("#")) {
                 String[] parts = line.substring(1).split(":", 2);
                 head.put(parts[0].strip(), parts[1].strip());
-            } else if (line.startsWith(sex + ",")) {
-                String[] cells = line.split(",");
-                rows.put(Integer.valueOf(cells[1].strip()), Double.valueOf(cells[2].strip()));
+                classes = classes(head.getOrDefault("smokingLevels", ""));
+            } else if (cells[0].equals(sex) && cells.length == 3) {
+                rows.put(Integer.valueOf(cells[1]), Double.valueOf(cells[2]));
+            } else if (cells[0].equals(sex)) {
+                // sex,age,smoking,qx
+                List<String> levels = classes.getOrDefault(cells[2], List.of(cells[2]));
+                if (levels.contains(level)) {
+                    smoking = levels;
+                    rows.put(Integer.valueOf(cells[1]), Double.valueOf(cells[3]));
+                }
             }
         }
         return new OracleTable(
-                rows, head.getOrDefault("ageBasis", "exact"), head.getOrDefault("withinYear", "constantForce"));
+                rows,
+                head.getOrDefault("ageBasis", "exact"),
+                head.getOrDefault("withinYear", "constantForce"),
+                smoking);
+    }
+
+    /** Classes as {@code nonsmoker=never,former; smoker=current}. */
+    private static Map<String, List<String>> classes(String text) {
+        Map<String, List<String>> result = new HashMap<>();
+        for (String part : text.split(";")) {
+            String[] sides = part.split("=");
+            if (sides.length == 2) {
+                result.put(sides[0].strip(), List.of(sides[1].strip().split("\\s*,\\s*")));
+            }
+        }
+        return result;
+    }
+
+    /** Whether these rates speak of a level of smoking. */
+    boolean speaksOf(String level) {
+        return smoking.isEmpty() || smoking.contains(level);
     }
 
     /** Exact age at which the curve ends. */

@@ -7,6 +7,7 @@ import nearworld.oracle.OraclePack.Behaviour;
 import nearworld.oracle.OraclePack.Condition;
 import nearworld.oracle.OraclePack.Event;
 import nearworld.oracle.OraclePack.Interaction;
+import nearworld.oracle.Values.Curve;
 
 /**
  * The prior over (conditions, behaviours, frailty) at the assessment's age and what follows from it for the population:
@@ -23,6 +24,9 @@ final class Population {
     final int bins;
     final double[] leaks;
     final double[] prior;
+    /** The prior given the table's class of smoking: it carries the baseline hazard, and nothing else. */
+    private final double[] ofTable;
+
     final int months;
     /** Integrated baseline hazard and length in years of each month; infinite where all die. */
     final double[] baseline;
@@ -40,6 +44,7 @@ final class Population {
         bins = pack.frailty.length;
         leaks = new double[pack.conditions.size()];
         prior = spreadOverBins(network(behaviourShares()));
+        ofTable = givenClass();
         months = (int) Math.ceil((table.end() - age) * 12 - 1e-9);
         baseline = new double[months];
         monthLength = new double[months];
@@ -151,6 +156,25 @@ final class Population {
         return result;
     }
 
+    private double[] givenClass() {
+        double[] result = prior.clone();
+        double total = 0;
+        for (int m = 0; m < result.length; m++) {
+            int[] held = levels[m / bins % levels.length];
+            for (int k = 0; k < held.length; k++) {
+                Behaviour behaviour = pack.behaviours.get(k);
+                boolean out = behaviour.id().equals("smoking")
+                        && !table.speaksOf(behaviour.levels().get(held[k]).id());
+                result[m] = out ? 0 : result[m];
+            }
+            total += result[m];
+        }
+        for (int m = 0; m < result.length; m++) {
+            result[m] /= total;
+        }
+        return result;
+    }
+
     /** Score of the conditions with their interactions, without frailty and behaviours. */
     double conditionScore(int mask) {
         double score = 0;
@@ -197,7 +221,7 @@ final class Population {
     }
 
     private void calibrate() {
-        double[] weight = prior.clone();
+        double[] weight = ofTable.clone();
         double start = age;
         for (int k = 0; k < months; k++) {
             double end = Math.min(table.end(), age + (k + 1) / 12.0);
@@ -241,8 +265,8 @@ final class Population {
         double meanExcess = 0;
         double meanRho = 0;
         for (int m = 0; m < prior.length; m++) {
-            meanExcess += prior[m] * populationExcess(m / bins / levels.length);
-            meanRho += prior[m] * rho[m];
+            meanExcess += ofTable[m] * populationExcess(m / bins / levels.length);
+            meanRho += ofTable[m] * rho[m];
         }
         double above = table.force(atAge) - meanExcess;
         if (above < 0) {
@@ -251,11 +275,13 @@ final class Population {
         return above / meanRho;
     }
 
-    /** Probability that what is there at the assessment was there at this age, where nothing dates it. */
+    /**
+     * Probability that what is there at the assessment was there at this age, where nothing dates it; for the population
+     * the same formula at a coming event's age.
+     */
     double omega(int i, double atAge) {
-        Condition condition = pack.conditions.get(i);
-        return Math.min(
-                1, condition.prevalence().value(atAge) / condition.prevalence().value(age));
+        Curve prevalence = pack.conditions.get(i).prevalence();
+        return Math.min(1, prevalence.value(atAge) / prevalence.value(age));
     }
 
     /** How far each condition of a mask counts at an age, in the population. */

@@ -29,7 +29,7 @@ final class RandomCases {
         this.dice = dice;
         this.pack = pack;
         today = LocalDate.of(2026, 1, 1).plusDays(dice.whole(0, 364));
-        bornOn = today.minusDays(dice.whole(13_500, 31_000));
+        bornOn = today.minusDays(dice.whole(8_500, 35_500));
         conditions = Values.names(pack.get("conditions"));
     }
 
@@ -38,9 +38,9 @@ final class RandomCases {
         ObjectNode applicant = file.putObject("applicant");
         applicant.put("sex", dice.chance(0.5) ? "male" : "female").put("bornOn", bornOn.toString());
         behaviours(applicant);
+        history();
         statements();
         findings();
-        history();
         cover();
         ArrayNode whatIfs = file.putArray("whatIfs");
         for (int w = dice.whole(2, 4); w > 0; w--) {
@@ -49,8 +49,12 @@ final class RandomCases {
         return file;
     }
 
+    /** A day of the life so far: now and then today, or the day of an occurrence. */
     private LocalDate past(int mostDays) {
-        return today.minusDays(dice.whole(0, mostDays));
+        if (!occurrences.isEmpty() && dice.chance(0.15)) {
+            return dice.of(occurrences).on();
+        }
+        return today.minusDays(dice.chance(0.05) ? 0 : dice.whole(0, Math.min(mostDays, 8_000)));
     }
 
     private void behaviours(ObjectNode applicant) {
@@ -123,7 +127,7 @@ final class RandomCases {
     }
 
     private void occurrences(ArrayNode list, String event) {
-        int count = Math.min(dice.whole(0, 2), 3 - occurrences.size());
+        int count = Math.min(dice.whole(0, 3), 4 - occurrences.size());
         LocalDate on = past(4500);
         for (int o = 0; o < count; o++) {
             // Now and then on the day of another event.
@@ -135,7 +139,9 @@ final class RandomCases {
             boolean known = occurrences.stream().anyMatch(x -> x.event().equals(event));
             if (o > 0) {
                 on = on.plusDays(dice.chance(0.3) ? dice.whole(1, 40) : dice.whole(60, 1500));
-                on = on.isAfter(today) ? today : on;
+                if (on.isAfter(today)) {
+                    return;
+                }
             }
             boolean first = !known || ChronoUnit.DAYS.between(before, on) > apart;
             occurrences.add(new Occurrence(event, on, first));
@@ -236,6 +242,10 @@ final class RandomCases {
     private boolean add(ObjectNode change) {
         String event = dice.of(Values.names(pack.get("events")));
         LocalDate on = coming(15);
+        // Tables run to 100 at least.
+        if (on.isAfter(bornOn.plusYears(99))) {
+            return false;
+        }
         int apart = pack.get("events").get(event).path("episodeDays").asInt(0);
         boolean merges = occurrences.stream()
                 .anyMatch(o -> o.event().equals(event) && ChronoUnit.DAYS.between(o.on(), on) <= apart);

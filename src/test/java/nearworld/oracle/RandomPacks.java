@@ -26,12 +26,16 @@ public final class RandomPacks {
     }
 
     private final Dice dice;
+    /** Now and then numbers far beyond what is published. */
+    private final double wild;
+
     private final ObjectNode pack = JSON.createObjectNode();
     private final List<String> conditions = new ArrayList<>();
     private final List<String> levels = new ArrayList<>();
 
     private RandomPacks(Dice dice, int count) {
         this.dice = dice;
+        wild = dice.chance(0.25) ? 2.5 : 1;
         ObjectNode head = pack.putObject("pack");
         head.put("id", "random").put("version", 1).put("title", "Random").put("population", "general");
         head.putObject("taper")
@@ -39,7 +43,7 @@ public final class RandomPacks {
                 .put("pivot", dice.whole(52, 70))
                 .put("to", dice.whole(95, 115));
         pack.putObject("frailty")
-                .put("variance", Dice.round(dice.ratio(0.05, 0.8)))
+                .put("variance", Dice.round(dice.ratio(0.05, 0.8 * wild)))
                 .put("points", dice.whole(2, 7));
         for (int i = 0; i < count; i++) {
             conditions.add("condition" + (char) ('A' + i));
@@ -64,11 +68,16 @@ public final class RandomPacks {
     public static Draw draw(long seed, int most) {
         Dice dice = new Dice(seed);
         for (int attempt = 0; attempt < ATTEMPTS; attempt++) {
-            String table = RandomTables.draw(dice);
             ObjectNode pack = new RandomPacks(dice, dice.whole(2, most)).pack;
             String packText = YAML.writeValueAsString(pack);
-            String caseText =
-                    JSON.writerWithDefaultPrettyPrinter().writeValueAsString(new RandomCases(dice, pack).draw());
+            ObjectNode file = new RandomCases(dice, pack).draw();
+            String caseText = JSON.writerWithDefaultPrettyPrinter().writeValueAsString(file);
+            boolean split = file.get("applicant").get("behaviours").has("smoking") && dice.chance(0.25);
+            String table = split
+                    ? RandomTables.split(
+                            dice,
+                            Values.names(pack.get("behaviours").get("smoking").get("levels")))
+                    : RandomTables.draw(dice);
             try {
                 BruteForce.Assessment expected = BruteForce.assess(table, packText, caseText);
                 return new Draw(seed, table, packText, caseText, expected);
@@ -108,7 +117,7 @@ public final class RandomPacks {
                             .put("40", Dice.round(dice.between(0.1, 0.5)))
                             .put("75", Dice.round(dice.between(0.1, 0.5)));
                 }
-                double ratio = Dice.round(l == 0 ? 1 : dice.ratio(0.9, 2.5));
+                double ratio = Dice.round(l == 0 ? 1 : dice.ratio(0.9 / wild, 2.5 * wild));
                 if (dice.chance(0.2)) {
                     one.putObject("hazardRatio").put("value", ratio).put("atAge", dice.whole(45, 80));
                 } else {
@@ -138,7 +147,7 @@ public final class RandomPacks {
         }
         boolean excess = dice.chance(0.3);
         if (!excess || dice.chance(0.5)) {
-            double ratio = Dice.round(dice.ratio(0.9, 3.5));
+            double ratio = Dice.round(dice.ratio(0.9 / wild, 3.5 * wild));
             if (dice.chance(0.3)) {
                 node.putObject("hazardRatio").put("value", ratio).put("atAge", dice.whole(45, 80));
             } else {
@@ -167,7 +176,7 @@ public final class RandomPacks {
         }
         ObjectNode byYears = node.putObject("excessPerMille");
         byYears.put("unknown", Dice.round(dice.ratio(1, 20)));
-        byYears.put("0", Dice.round(dice.ratio(20, 100)));
+        byYears.put(dice.chance(0.8) ? "0" : "0.5", Dice.round(dice.ratio(20, 100)));
         byYears.put(dice.chance(0.5) ? "2" : "3.5", Dice.round(dice.ratio(5, 40)));
         byYears.put("10", Dice.round(dice.ratio(1, 5)));
     }
@@ -206,7 +215,7 @@ public final class RandomPacks {
             ObjectNode one = list.addObject();
             List<String> of = some(dice.chance(0.3) && conditions.size() > 2 ? 3 : 2);
             of.forEach(one.putArray("of")::add);
-            number(one, "ratio", dice.ratio(0.7, 1.4));
+            number(one, "ratio", dice.ratio(0.7 / wild, 1.4 * wild));
         }
     }
 
@@ -228,7 +237,7 @@ public final class RandomPacks {
 
     private void event(ObjectNode node) {
         if (dice.chance(0.8)) {
-            number(node, "frailtyPower", dice.between(0, 1.3));
+            number(node, "frailtyPower", dice.between(0, 1.3 * wild));
         }
         if (dice.chance(0.5)) {
             node.put("episodeDays", dice.whole(0, 40));
@@ -242,7 +251,7 @@ public final class RandomPacks {
                     .put("80", Dice.round(young * dice.between(2, 20)));
         }
         ObjectNode ratios = node.putObject("rateRatios");
-        some(dice.whole(0, 3)).forEach(c -> number(ratios, c, dice.ratio(0.7, 5)));
+        some(dice.whole(0, 3)).forEach(c -> number(ratios, c, dice.ratio(0.7 / wild, 5 * wild)));
         for (String level : levels) {
             if (dice.chance(0.3)) {
                 number(ratios, level, dice.ratio(0.8, 2.5));
@@ -269,16 +278,16 @@ public final class RandomPacks {
     private void outcome(ObjectNode node, double share, boolean survived) {
         node.putObject("share")
                 .put("40", Dice.round(share * dice.between(0.5, 1)))
-                .put("80", Dice.round(share * dice.between(0.5, 2)));
+                .put("80", Dice.round(share * dice.between(0.5, 1.4)));
         if (dice.chance(0.6)) {
             ObjectNode odds = node.putObject("oddsRatios");
-            some(dice.whole(1, 2)).forEach(c -> number(odds, c, dice.ratio(0.6, 3)));
+            some(dice.whole(1, 2)).forEach(c -> number(odds, c, dice.ratio(0.6 / wild, 3 * wild)));
         }
         if (survived && dice.chance(0.85)) {
             ObjectNode effect = node.putObject("afterEffect");
             boolean ratio = dice.chance(0.8);
             if (ratio) {
-                number(effect, "hazardRatio", dice.ratio(1, 2.5));
+                number(effect, "hazardRatio", dice.ratio(1 / wild, 2.5 * wild));
             }
             if (!ratio || dice.chance(0.3)) {
                 number(effect, "excessPerMille", dice.ratio(1, 20));
@@ -295,13 +304,13 @@ public final class RandomPacks {
             ObjectNode one = node.putObject("finding" + f);
             boolean several = dice.chance(0.3);
             if (several) {
-                several(one, some(2));
+                several(one, some(dice.whole(2, Math.min(3, conditions.size()))));
             } else {
                 one.put("of", dice.of(conditions));
                 boolean three = dice.chance(0.4);
                 ObjectNode of = one.putObject("levels");
-                double high = Dice.round(dice.between(0.4, 0.7));
-                double low = Dice.round(dice.between(0.02, 0.2));
+                double high = dice.thousandths(0.4, 0.7);
+                double low = dice.thousandths(0.02, 0.2);
                 of.putObject("high").put("present", high).put("absent", low);
                 if (three) {
                     of.putObject("middle").put("present", 0.2).put("absent", 0.25);
@@ -321,11 +330,11 @@ public final class RandomPacks {
         ObjectNode yesPresent = yes.putObject("present");
         ObjectNode noPresent = no.putObject("present");
         for (String c : of) {
-            double p = Dice.round(dice.between(0.3, 0.9));
+            double p = dice.thousandths(0.3, 0.9);
             yesPresent.put(c, p);
             noPresent.put(c, Dice.round(1 - p));
         }
-        double absent = Dice.round(dice.between(0.02, 0.25));
+        double absent = dice.thousandths(0.02, 0.25);
         yes.put("absent", absent);
         no.put("absent", Dice.round(1 - absent));
     }
