@@ -36,7 +36,8 @@ public final class Chromium implements AutoCloseable {
                 .chromium()
                 .launch(new BrowserType.LaunchOptions()
                         .setHeadless(true)
-                        .setExecutablePath(Path.of(System.getenv().getOrDefault("NEARWORLD_CHROMIUM", "/usr/bin/chromium")))
+                        .setExecutablePath(
+                                Path.of(System.getenv().getOrDefault("NEARWORLD_CHROMIUM", "/usr/bin/chromium")))
                         .setArgs(FLAGS));
         return new Chromium(playwright, browser);
     }
