@@ -8,7 +8,8 @@ import org.jspecify.annotations.Nullable;
  * @param intact true where every entry and everything that the entries vouch for is unchanged
  * @param entries how many entries were walked
  * @param brokenAt number of the first entry that does not hold; null where all do
- * @param reason {@code gap}, {@code hash}, {@code predecessor}, {@code content} or {@code assessment}; null where intact
+ * @param reason {@code gap}, {@code hash}, {@code predecessor}, {@code content}, {@code assessment}, {@code artefact} or
+ *     {@code missingEntry}; null where intact
  * @param assessments how many stored assessments were checked
  */
 public record Verification(
