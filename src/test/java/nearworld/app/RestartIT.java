@@ -44,7 +44,10 @@ class RestartIT {
         Browser browser = new Browser(server);
         assertThat(browser.signIn("ada.quill", password("ada.quill")).headers().allValues("set-cookie"))
                 .anyMatch(c -> c.startsWith("SESSION=") && c.contains("HttpOnly") && c.contains("SameSite=Lax"));
-        String path = browser.post("/cases", Map.of("caseRef", "KILLED-1")).headers().firstValue("location").orElseThrow();
+        String path = browser.post("/cases", Map.of("caseRef", "KILLED-1"))
+                .headers()
+                .firstValue("location")
+                .orElseThrow();
         String casePath = URI.create(path).getPath();
 
         AtomicInteger confirmed = new AtomicInteger();
@@ -74,7 +77,12 @@ class RestartIT {
         while (true) {
             int version = confirmed.get();
             Map<String, String> fields = Map.of(
-                    "version", String.valueOf(version), "bornOn", String.valueOf(FIRST_YEAR + version + 1), "sex", "male");
+                    "version",
+                    String.valueOf(version),
+                    "bornOn",
+                    String.valueOf(FIRST_YEAR + version + 1),
+                    "sex",
+                    "male");
             try {
                 if (browser.post(casePath + "/person", fields).statusCode() != 302) {
                     return;
