@@ -111,28 +111,16 @@ class BoundariesTest {
             slices().matching("nearworld.(**)").should().beFreeOfCycles();
 
     @ArchTest
-    static final ArchRule entitiesStayInTheirFeature = classes()
-            .that()
-            .areAnnotatedWith(Entity.class)
-            .should()
-            .bePackagePrivate()
-            .allowEmptyShould(true);
+    static final ArchRule entitiesStayInTheirFeature =
+            classes().that().areAnnotatedWith(Entity.class).should().bePackagePrivate();
 
     @ArchTest
-    static final ArchRule repositoriesStayInTheirFeature = classes()
-            .that()
-            .areAssignableTo(Repository.class)
-            .should()
-            .bePackagePrivate()
-            .allowEmptyShould(true);
+    static final ArchRule repositoriesStayInTheirFeature =
+            classes().that().areAssignableTo(Repository.class).should().bePackagePrivate();
 
     @ArchTest
-    static final ArchRule controllersStayInTheirFeature = classes()
-            .that()
-            .areMetaAnnotatedWith(Controller.class)
-            .should()
-            .bePackagePrivate()
-            .allowEmptyShould(true);
+    static final ArchRule controllersStayInTheirFeature =
+            classes().that().areMetaAnnotatedWith(Controller.class).should().bePackagePrivate();
 
     @Test
     void featuresUseOnlyWhatOthersOffer() {
