@@ -56,8 +56,12 @@ final class AssessCommand {
             and local law on sex, genetic information, disability and data protection comes first.
             """;
 
+    /** Answers between two looks at whether anybody still reads. */
+    private static final int CHECKED_EVERY = 64;
+
     private final Console console;
     private boolean anyRefused;
+    private int printed;
 
     AssessCommand(Console console) {
         this.console = console;
@@ -138,6 +142,8 @@ final class AssessCommand {
             while (!waiting.isEmpty()) {
                 print(waiting.remove());
             }
+        } catch (ClosedException e) {
+            return REFUSED;
         } finally {
             pool.shutdownNow();
         }
@@ -160,5 +166,14 @@ final class AssessCommand {
             anyRefused = true;
             console.faults(answer);
         }
+        printed++;
+        if (printed % CHECKED_EVERY == 0 && console.isClosed()) {
+            throw new ClosedException();
+        }
+    }
+
+    /** Nobody reads the output any more. */
+    private static final class ClosedException extends RuntimeException {
+        private static final long serialVersionUID = 1L;
     }
 }

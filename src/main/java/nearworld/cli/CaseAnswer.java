@@ -11,6 +11,6 @@ import org.jspecify.annotations.Nullable;
  * @param faults why it was refused
  */
 record CaseAnswer(@Nullable String result, List<FaultInFile> faults) {
-    /** A fault and the file that has it: the case's, or the pack's. */
+    /** A fault and the file that has it: the case's, or the case's with the pack's behind it. */
     record FaultInFile(String file, LocatedFault fault) {}
 }

@@ -60,7 +60,8 @@ final class CaseAssessment {
 
     private CaseAnswer.FaultInFile located(CaseText text, Fault fault) {
         if (PackPlaces.isOfPack(fault.path())) {
-            return new CaseAnswer.FaultInFile(pack.file(), new LocatedFault(fault, pack.of(fault.path())));
+            String files = text.file() + ":" + text.firstLine() + ": " + pack.file();
+            return new CaseAnswer.FaultInFile(files, new LocatedFault(fault, pack.of(fault.path())));
         }
         Place place = JsonText.read(text.bytes(), CaseReader.MOST_BYTES, text.firstLine())
                 .faults()

@@ -75,7 +75,7 @@ final class CaseTexts {
         }
         if (line == null) {
             sink.accept(new CaseText(file, 1, before.toByteArray(), List.of()));
-        } else if (line.length <= MOST && JsonText.isUnfinished(new String(line, StandardCharsets.UTF_8))) {
+        } else if (isOneDocument(line)) {
             before.writeBytes(line);
             before.write('\n');
             before.writeBytes(in.readNBytes(MOST + 1));
@@ -84,6 +84,12 @@ final class CaseTexts {
             one(file, line, number);
             lines(file, in, number + 1);
         }
+    }
+
+    /** What does not begin with a whole object is one document, or none: its faults are told once, not line by line. */
+    private static boolean isOneDocument(byte[] firstLine) {
+        String text = new String(firstLine, StandardCharsets.UTF_8);
+        return firstLine.length > MOST || !text.replace("\uFEFF", "").stripLeading().startsWith("{") || JsonText.isUnfinished(text);
     }
 
     private void lines(String file, InputStream in, int firstLine) throws IOException {

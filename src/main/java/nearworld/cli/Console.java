@@ -33,9 +33,10 @@ final class Console {
         out.println(line);
     }
 
-    /** True where nobody reads the results any more. */
+    /** True where nobody reads any more. Sends on what is waiting. */
     boolean isClosed() {
-        return out.checkError();
+        boolean results = out.checkError();
+        return err.checkError() || results;
     }
 
     void say(String line) {
