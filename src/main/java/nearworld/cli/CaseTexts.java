@@ -89,7 +89,9 @@ final class CaseTexts {
     /** What does not begin with a whole object is one document, or none: its faults are told once, not line by line. */
     private static boolean isOneDocument(byte[] firstLine) {
         String text = new String(firstLine, StandardCharsets.UTF_8);
-        return firstLine.length > MOST || !text.replace("\uFEFF", "").stripLeading().startsWith("{") || JsonText.isUnfinished(text);
+        return firstLine.length > MOST
+                || !text.replace("\uFEFF", "").stripLeading().startsWith("{")
+                || JsonText.isUnfinished(text);
     }
 
     private void lines(String file, InputStream in, int firstLine) throws IOException {

@@ -210,4 +210,45 @@ class AssessCommandTest {
         assertThat(run.status).isEqualTo(1);
         assertThat(run.err).singleElement().asString().contains("none.json: $: unreadable (detail=no such file)");
     }
+
+    @Test
+    void namesCaseAndPackWhereThePackDoesNotFit() throws IOException {
+        Path pack = Files.writeString(
+                folder.resolve("links.yaml"),
+                Files.readString(Path.of(PACK)).replace("hypertension: 0.02", "hypertension: 0.9"));
+
+        Run run = run("", "--table", TABLE, "--pack", pack.toString(), worked(1));
+
+        assertThat(run.status).isEqualTo(1);
+        assertThat(run.err)
+                .singleElement()
+                .asString()
+                .startsWith(worked(1) + ":1: " + pack + ":12:")
+                .contains("$.conditions.coronaryDisease.causedBy: linksExceedPrevalence (")
+                .contains("sex=male");
+    }
+
+    @Test
+    void refusesAPersonWhoDied() {
+        Run run = assess("", worked(3));
+
+        assertThat(run.err)
+                .singleElement()
+                .asString()
+                .startsWith(worked(3) + ":")
+                .contains(": $.death: notSupported: ")
+                .doesNotContain("missingField");
+    }
+
+    @Test
+    void tellsBinaryJunkOnce() throws IOException {
+        byte[] junk = new byte[2_000_000];
+        new java.util.Random(20261201).nextBytes(junk);
+        Path file = Files.write(folder.resolve("junk.bin"), junk);
+
+        Run run = assess("", file.toString(), worked(1));
+
+        assertThat(run.out).hasSize(1);
+        assertThat(run.err).singleElement().asString().contains("junk.bin: $: tooLarge (bound=1048576)");
+    }
 }

@@ -33,7 +33,8 @@ final class HistoryPart {
         this.faults = faults;
     }
 
-    List<CaseFile.History> read(Spot history) {
+    /** @param died true where the person died: outcomes are then another matter */
+    List<CaseFile.History> read(Spot history, boolean died) {
         List<CaseFile.History> result = new ArrayList<>();
         for (Spot spot : history.items()) {
             int event = index.event(spot.at("event"));
@@ -42,7 +43,7 @@ final class HistoryPart {
             window(event, from, to, spot);
             List<CaseFile.Occurrence> list = new ArrayList<>();
             for (Spot o : spot.at("occurrences").items()) {
-                occurrence(event, o, list);
+                occurrence(event, o, list, died);
             }
             result.add(new CaseFile.History(event, from, to, list));
         }
@@ -50,14 +51,13 @@ final class HistoryPart {
         return result;
     }
 
-    private void occurrence(int event, Spot spot, List<CaseFile.Occurrence> list) {
+    private void occurrence(int event, Spot spot, List<CaseFile.Occurrence> list, boolean died) {
         PartialDate on = dates.past(spot.at("on"));
         int outcome = index.outcome(event, spot.at("outcome"));
-        if (spot.isObject() && !spot.has("outcome")) {
+        if (!died && spot.isObject() && !spot.has("outcome")) {
             faults.add(Fault.of("missingField", spot.at("outcome").path(), "field", "outcome"));
         }
-        if (outcome >= 0
-                && index.pack().events().get(event).outcomes().get(outcome).fatal()) {
+        if (!died && outcome >= 0 && index.pack().events().get(event).outcomes().get(outcome).fatal()) {
             faults.add(Fault.of(
                     "fatalOutcomeOfLiving",
                     spot.at("outcome").path(),
