@@ -90,7 +90,8 @@ public final class CaseReader {
         List<CaseFile.BehaviourReport> behaviours = evidence.behaviours(applicant.at("behaviours"));
         List<CaseFile.Statement> statements = evidence.statements(root.at("statements"));
         List<CaseFile.FindingReport> findings = evidence.findings(root.at("findings"));
-        List<CaseFile.History> histories = history.read(root.at("history"), root.at("death").isGiven());
+        List<CaseFile.History> histories =
+                history.read(root.at("history"), root.at("death").isGiven());
         CaseFile.Cover cover = new CoverPart(faults).read(root.at("cover"));
         List<CaseFile.WhatIf> whatIfs = new WhatIfPart(index, dates, history, faults).read(root.at("whatIfs"));
         if (!faults.isEmpty()) {

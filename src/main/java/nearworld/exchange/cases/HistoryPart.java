@@ -57,7 +57,9 @@ final class HistoryPart {
         if (!died && spot.isObject() && !spot.has("outcome")) {
             faults.add(Fault.of("missingField", spot.at("outcome").path(), "field", "outcome"));
         }
-        if (!died && outcome >= 0 && index.pack().events().get(event).outcomes().get(outcome).fatal()) {
+        if (!died
+                && outcome >= 0
+                && index.pack().events().get(event).outcomes().get(outcome).fatal()) {
             faults.add(Fault.of(
                     "fatalOutcomeOfLiving",
                     spot.at("outcome").path(),
