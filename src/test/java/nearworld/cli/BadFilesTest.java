@@ -66,7 +66,7 @@ class BadFilesTest {
         assertThat(run.status()).isEqualTo(1);
         assertThat(run.err()).hasSize(1);
         assertThat(run.err().get(0))
-                .startsWith(pack + ":13:")
+                .startsWith(CASE + ":1: " + pack + ":13:")
                 .contains("$.conditions.heartFailure", "linksExceedPrevalence");
     }
 }
