@@ -2,6 +2,8 @@ package nearworld.engine.inference;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import nearworld.engine.basics.Fault;
 import nearworld.engine.mortality.LifeTable;
@@ -71,8 +73,19 @@ public final class Person {
     /** What makes an assessment impossible. */
     public List<Fault> faults() {
         List<Fault> faults = new ArrayList<>(prior.faults());
-        faults.addAll(baseline.faults());
+        for (Fault fault : baseline.faults()) {
+            Map<String, String> values = new TreeMap<>(fault.values());
+            values.put("conditions", String.join(", ", namesWithExcess()));
+            faults.add(new Fault(fault.code(), fault.path(), values));
+        }
         return faults;
+    }
+
+    private List<String> namesWithExcess() {
+        return pack.conditions().stream()
+                .filter(c -> c.excess() != null)
+                .map(Condition::id)
+                .toList();
     }
 
     public EvidencePack pack() {
