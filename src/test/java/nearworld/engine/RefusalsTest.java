@@ -59,7 +59,7 @@ class RefusalsTest {
 
         assertThat(fault.code()).isEqualTo("excessAboveTable");
         assertThat(fault.path()).startsWith("$.conditions");
-        assertThat(fault.values().toString()).contains("heartFailure");
+        assertThat(fault.values()).containsEntry("conditions", "heartFailure").containsEntry("age", "40.0");
     }
 
     @Test
@@ -116,8 +116,8 @@ class RefusalsTest {
     void aDeathIsNotSupported() {
         EvidencePack pack = Inputs.pack(PACK);
         CaseFile alive = Inputs.caseFile(pack, null, CASE.formatted("1966-12-01", ""));
-        CaseFile.Death death = new CaseFile.Death(
-                PartialDate.ofDay(LocalDate.of(2026, 3, 1)), CaseFile.Cause.OTHER, -1, null);
+        CaseFile.Death death =
+                new CaseFile.Death(PartialDate.ofDay(LocalDate.of(2026, 3, 1)), CaseFile.Cause.OTHER, -1, null);
         CaseFile dead = new CaseFile(
                 alive.caseRef(),
                 alive.assessedOn(),
