@@ -192,7 +192,7 @@ final class Future {
         double length = baseline.length(month) * part;
         double logRatio = baseline.taperAt(month) * habits.shift(key.habit(), time);
         double excess = 0;
-        for (Effect e : key.effects()) {
+        for (Effect e : key.effects().all()) {
             double read = Math.max(time, e.start());
             double left = e.left(read);
             logRatio += person.pack().taper().at(baseline.age() + read) * e.logRatio() * left;
@@ -238,10 +238,7 @@ final class Future {
                     @Nullable
                     Effect effect =
                             Effect.of(outcomes.get(o).afterEffect(), m.event().at());
-                    List<Effect> effects = new ArrayList<>(s.getKey().effects());
-                    if (effect != null) {
-                        effects.add(effect);
-                    }
+                    Effects effects = s.getKey().effects().and(effect);
                     branch(
                             next,
                             s.getKey().present(),
@@ -279,7 +276,7 @@ final class Future {
             Strands.Key before,
             ScoreMeasure measure,
             double chance,
-            List<Effect> effects,
+            Effects effects,
             Moment m,
             long ruledOut,
             int at) {

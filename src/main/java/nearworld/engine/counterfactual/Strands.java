@@ -1,7 +1,6 @@
 package nearworld.engine.counterfactual;
 
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
 import nearworld.engine.inference.ScoreGrid;
 import nearworld.engine.inference.ScoreMeasure;
@@ -21,7 +20,7 @@ final class Strands {
      * @param habit key of {@link Habits}
      * @param effects the after-effects at work, in the order of their occurrences
      */
-    record Key(long present, int habit, List<Effect> effects) {}
+    record Key(long present, int habit, Effects effects) {}
 
     Strands(ScoreGrid grid) {
         this.grid = grid;

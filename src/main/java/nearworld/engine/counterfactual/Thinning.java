@@ -2,7 +2,6 @@ package nearworld.engine.counterfactual;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
 import nearworld.engine.inference.ConditionStates;
 import nearworld.engine.inference.EventMoment;
 import nearworld.engine.inference.Evidence;
@@ -27,6 +26,10 @@ final class Thinning {
     private final EvidenceFactors evidence;
     private final TwinNetwork twin;
     private final long[] earlierOccurrences;
+    private final Effects root = Effects.none();
+    private final @Nullable Effect[][] effects;
+    private final int[] alwaysBehaviours;
+    private final double[][][] alwaysRatios;
     private final @Nullable List<Course> onlyCourse;
     private boolean newOccurrences;
 
@@ -36,7 +39,7 @@ final class Thinning {
      * @param kept occurrences that stay, as a bit set
      * @param effects their after-effects, in their order
      */
-    record Course(double probability, long kept, List<Effect> effects) {}
+    record Course(double probability, long kept, Effects effects) {}
 
     Thinning(Person person, WhatIfPlan plan, ConditionStates states, EvidenceFactors evidence, TwinNetwork twin) {
         this.person = person;
@@ -47,12 +50,18 @@ final class Thinning {
         this.earlierOccurrences = person.evidence().occurrences().stream()
                 .mapToLong(o -> states.occurrencesBefore(o.day(), false))
                 .toArray();
+        this.effects = effects();
+        this.alwaysBehaviours = plan.always().keySet().stream()
+                .mapToInt(Integer::intValue)
+                .sorted()
+                .toArray();
+        this.alwaysRatios = alwaysRatios();
         this.onlyCourse = plan.undoesNothing() ? List.of(nothingUndone()) : null;
     }
 
     /** All occurrences stay, with the outcomes and starts that the plan gives. */
     private Course nothingUndone() {
-        List<Course> course = List.of(new Course(1, 0, List.of()));
+        List<Course> course = List.of(new Course(1, 0, root));
         for (int j = 0; j < person.evidence().occurrences().size(); j++) {
             List<Course> next = new ArrayList<>();
             int recorded = person.evidence().occurrences().get(j).outcome();
@@ -72,7 +81,7 @@ final class Thinning {
         if (onlyCourse != null) {
             return onlyCourse;
         }
-        List<Course> courses = List.of(new Course(1, 0, List.of()));
+        List<Course> courses = List.of(new Course(1, 0, root));
         for (int j = 0; j < person.evidence().occurrences().size(); j++) {
             List<Course> next = new ArrayList<>();
             for (Course c : courses) {
@@ -138,15 +147,40 @@ final class Thinning {
         if (probability <= 0) {
             return;
         }
-        Evidence.Occurrence occurrence = person.evidence().occurrences().get(j);
-        double start = plan.moved().getOrDefault(j, person.evidence().yearsFromToday(occurrence.lastDay()));
-        EventType event = person.pack().events().get(occurrence.event());
-        @Nullable Effect effect = Effect.of(event.outcomes().get(outcome).afterEffect(), start);
-        List<Effect> effects = new ArrayList<>(course.effects());
-        if (effect != null) {
-            effects.add(effect);
+        next.add(new Course(probability, course.kept() | 1L << j, course.effects().and(effects[j][outcome])));
+    }
+
+    /** The after-effect of each outcome of each occurrence. */
+    private @Nullable Effect[][] effects() {
+        List<Evidence.Occurrence> occurrences = person.evidence().occurrences();
+        @Nullable Effect[][] all = new Effect[occurrences.size()][];
+        for (int j = 0; j < all.length; j++) {
+            Evidence.Occurrence o = occurrences.get(j);
+            double start = plan.moved().getOrDefault(j, person.evidence().yearsFromToday(o.lastDay()));
+            all[j] = person.pack().events().get(o.event()).outcomes().stream()
+                    .map(outcome -> Effect.of(outcome.afterEffect(), start))
+                    .toArray(Effect[]::new);
         }
-        next.add(new Course(probability, course.kept() | 1L << j, List.copyOf(effects)));
+        return all;
+    }
+
+    /** What the behaviours that have always been another make of R, by occurrence, behaviour and recorded level. */
+    private double[][][] alwaysRatios() {
+        List<Evidence.Occurrence> occurrences = person.evidence().occurrences();
+        double[][][] ratios = new double[occurrences.size()][alwaysBehaviours.length][];
+        for (int j = 0; j < ratios.length; j++) {
+            EventType event = person.pack().events().get(occurrences.get(j).event());
+            for (int k = 0; k < alwaysBehaviours.length; k++) {
+                int b = alwaysBehaviours[k];
+                int level = java.util.Objects.requireNonNull(plan.always().get(b));
+                ratios[j][k] = java.util.stream.IntStream.range(
+                                0, person.pack().behaviours().get(b).levels().size())
+                        .mapToDouble(l -> EvidenceFactors.levelRate(event, b, level)
+                                / EvidenceFactors.levelRate(event, b, l))
+                        .toArray();
+            }
+        }
+        return ratios;
     }
 
     /** R′/R of an occurrence. */
@@ -164,9 +198,8 @@ final class Thinning {
                         / (1 + recorded * (r.factor().value() - 1));
             }
         }
-        for (Map.Entry<Integer, Integer> b : new java.util.TreeMap<>(plan.always()).entrySet()) {
-            ratio *= EvidenceFactors.levelRate(event, b.getKey(), b.getValue())
-                    / EvidenceFactors.levelRate(event, b.getKey(), s[b.getKey()]);
+        for (int k = 0; k < alwaysBehaviours.length; k++) {
+            ratio *= alwaysRatios[j][k][s[alwaysBehaviours[k]]];
         }
         return ratio;
     }

@@ -29,13 +29,17 @@ public record WhatIfPlan(
         List<Added> added) {
 
     public WhatIfPlan {
-        outcomes = Map.copyOf(outcomes);
-        moved = Map.copyOf(moved);
-        cured = Map.copyOf(cured);
-        always = Map.copyOf(always);
-        habits = Map.copyOf(habits);
+        outcomes = sorted(outcomes);
+        moved = sorted(moved);
+        cured = sorted(cured);
+        always = sorted(always);
+        habits = sorted(habits);
         treatments = List.copyOf(treatments);
         added = List.copyOf(added);
+    }
+
+    private static <T> Map<Integer, T> sorted(Map<Integer, T> map) {
+        return java.util.Collections.unmodifiableMap(new java.util.TreeMap<>(map));
     }
 
     /** Those at a worse level move to a level from a time on. */

@@ -19,11 +19,12 @@ import org.jspecify.annotations.Nullable;
 
 /** The worlds of a living person: who the people in them are today, and how long they live from there. */
 public final class Worlds {
-    /** Twin states below this part of the whole are left out: a million of them stay within 1e-8. */
-    private static final double NEGLIGIBLE = 1e-14;
+    /** Joint states of both worlds below this part of the whole are left out: a hundred thousand stay within 1e-8. */
+    private static final double NEGLIGIBLE = 1e-13;
 
     private final Person person;
     private final Posterior posterior;
+    private final Effects noEffects = Effects.none();
 
     public Worlds(Person person, Posterior posterior) {
         this.person = person;
@@ -59,13 +60,13 @@ public final class Worlds {
     public Revealed posteriorWorlds() {
         Strands recorded = new Strands(person.baseline().grid());
         Strands removed = new Strands(person.baseline().grid());
-        List<Effect> effects = recordedEffects();
+        Effects effects = recordedEffects();
         posterior.hidden().forEach((s, measure) -> {
             if (!person.aftermath().isNeutral()) {
                 measure.multiply(Posterior.aftermath(person, posterior.states(), posterior.rows(), s));
             }
             add(recorded, posterior.states(), posterior.rows(), s, measure, true, effects);
-            add(removed, posterior.states(), posterior.rows(), s, measure, false, List.of());
+            add(removed, posterior.states(), posterior.rows(), s, measure, false, noEffects);
         });
         return new Revealed(run(recorded), run(removed));
     }
@@ -84,7 +85,7 @@ public final class Worlds {
             int[] s,
             ScoreMeasure measure,
             boolean withEvents,
-            List<Effect> effects) {
+            Effects effects) {
         long before = 0;
         long present = 0;
         for (int i = 0; i < person.pack().conditions().size(); i++) {
@@ -99,15 +100,11 @@ public final class Worlds {
         strands.at(new Strands.Key(present & person.withExcess(), 0, effects)).addShifted(measure, shift, 1);
     }
 
-    private List<Effect> recordedEffects() {
-        List<Effect> effects = new ArrayList<>();
+    private Effects recordedEffects() {
+        Effects effects = noEffects;
         for (Evidence.Occurrence o : person.evidence().occurrences()) {
             Outcome outcome = person.pack().events().get(o.event()).outcomes().get(o.outcome());
-            @Nullable
-            Effect effect = Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay()));
-            if (effect != null) {
-                effects.add(effect);
-            }
+            effects = effects.and(Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay())));
         }
         return effects;
     }
@@ -117,7 +114,7 @@ public final class Worlds {
         ConditionStates states = posterior.states();
         EvidenceFactors prior = person.factors(states, false);
         Strands strands = new Strands(person.baseline().grid());
-        List<Effect> effects = recordedEffects();
+        Effects effects = recordedEffects();
         new HiddenStates(
                         prior.factors(),
                         person.scores().terms(person.prior(), states, prior.cards()),
@@ -167,6 +164,9 @@ public final class Worlds {
                 new Habits(person.pack(), person.scores(), person.evidence(), habits(person.evidence(), plan), changes);
         Strands strands = new Strands(person.baseline().grid());
         hidden.forEach((s, measure) -> {
+            if (measure.size() < NEGLIGIBLE * posterior.mass()) {
+                return;
+            }
             if (!person.aftermath().isNeutral()) {
                 measure.multiply(Posterior.aftermath(person, states, told, s));
             }
@@ -195,7 +195,7 @@ public final class Worlds {
             ScoreMeasure measure,
             double probability) {
         double levels = 0;
-        for (Map.Entry<Integer, Integer> b : new TreeMap<>(plan.always()).entrySet()) {
+        for (Map.Entry<Integer, Integer> b : plan.always().entrySet()) {
             levels += person.scores().level(b.getKey(), b.getValue())
                     - person.scores().level(b.getKey(), s[b.getKey()]);
         }
