@@ -137,7 +137,7 @@ public final class Assessor {
         Worlds worlds = new Worlds(person, posterior);
         WorldCurve tableCurve = worlds.table();
         double age = person.baseline().age();
-        Headline headline = new Headline(person.baseline().table(), age, tableCurve.survival(), file.cover());
+        Headline headline = new Headline(person.baseline().table(), tableCurve.survival(), file.cover());
         List<WorldResult> results = new ArrayList<>();
         results.add(headline.of("table", tableCurve, age, null));
         Worlds.Revealed revealed = worlds.posteriorWorlds();
@@ -222,7 +222,6 @@ public final class Assessor {
                 : worlds.posteriorWorlds().recorded();
         Headline own = new Headline(
                 person.baseline().table(),
-                person.baseline().age(),
                 worlds.table().survival(),
                 file.cover());
         return own.of("variant", curve, Double.NaN, null);

@@ -18,13 +18,11 @@ final class Headline {
     private static final double AGE_PRECISION = 1e-9;
 
     private final LifeTable life;
-    private final double age;
     private final List<Double> table;
     private final int termYears;
 
-    Headline(LifeTable life, double age, List<Double> tableSurvival, @Nullable Cover cover) {
+    Headline(LifeTable life, List<Double> tableSurvival, @Nullable Cover cover) {
         this.life = life;
-        this.age = age;
         this.table = tableSurvival;
         int whole = (tableSurvival.size() - 1) / MONTHS;
         int term = cover == null || cover.years() == null ? whole : Math.min(cover.years(), whole);

@@ -147,7 +147,8 @@ final class Thinning {
         if (probability <= 0) {
             return;
         }
-        next.add(new Course(probability, course.kept() | 1L << j, course.effects().and(effects[j][outcome])));
+        next.add(new Course(
+                probability, course.kept() | 1L << j, course.effects().and(effects[j][outcome])));
     }
 
     /** The after-effect of each outcome of each occurrence. */
@@ -175,8 +176,8 @@ final class Thinning {
                 int level = java.util.Objects.requireNonNull(plan.always().get(b));
                 ratios[j][k] = java.util.stream.IntStream.range(
                                 0, person.pack().behaviours().get(b).levels().size())
-                        .mapToDouble(l -> EvidenceFactors.levelRate(event, b, level)
-                                / EvidenceFactors.levelRate(event, b, l))
+                        .mapToDouble(l ->
+                                EvidenceFactors.levelRate(event, b, level) / EvidenceFactors.levelRate(event, b, l))
                         .toArray();
             }
         }

@@ -104,7 +104,8 @@ public final class Worlds {
         Effects effects = noEffects;
         for (Evidence.Occurrence o : person.evidence().occurrences()) {
             Outcome outcome = person.pack().events().get(o.event()).outcomes().get(o.outcome());
-            effects = effects.and(Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay())));
+            effects = effects.and(
+                    Effect.of(outcome.afterEffect(), person.evidence().yearsFromToday(o.lastDay())));
         }
         return effects;
     }
@@ -132,8 +133,7 @@ public final class Worlds {
     }
 
     /** A what-if: the posterior carried over by the twin network and by thinning, then lived on. */
-    public WorldCurve whatIf(WhatIfPlan asked) {
-        WhatIfPlan plan = effective(asked);
+    public WorldCurve whatIf(WhatIfPlan plan) {
         boolean undoes = !plan.undoesNothing();
         ConditionStates states =
                 undoes ? new ConditionStates(person.pack(), person.evidence().occurrences(), true) : posterior.states();
@@ -235,24 +235,6 @@ public final class Worlds {
             told |= (odds & differing) != 0 ? odds : 0;
         }
         return told;
-    }
-
-    /** An undated change to the level that is recorded changes nothing. */
-    private WhatIfPlan effective(WhatIfPlan plan) {
-        Map<Integer, Integer> always = new TreeMap<>(plan.always());
-        always.entrySet()
-                .removeIf(b -> person.evidence().levels().get(b.getKey()).equals(b.getValue()));
-        return new WhatIfPlan(
-                plan.name(),
-                plan.removed(),
-                plan.outcomes(),
-                plan.moved(),
-                plan.never(),
-                plan.cured(),
-                always,
-                plan.habits(),
-                plan.treatments(),
-                plan.added());
     }
 
     /** The habits given up that a world still knows: not those of behaviours that have always been at a level. */

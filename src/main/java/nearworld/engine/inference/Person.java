@@ -8,8 +8,10 @@ import java.util.TreeSet;
 import nearworld.engine.basics.Fault;
 import nearworld.engine.mortality.LifeTable;
 import nearworld.engine.network.EvidencePack;
+import nearworld.engine.network.EvidencePack.AfterEffect;
 import nearworld.engine.network.EvidencePack.Condition;
 import nearworld.engine.network.EvidencePack.ConditionFactor;
+import nearworld.engine.network.EvidencePack.EventType;
 import org.jspecify.annotations.Nullable;
 
 /** Everything about one person that all worlds share: prior, baseline, evidence, and what the evidence says. */
@@ -36,7 +38,7 @@ public final class Person {
         double earliest = evidence.occurrences().isEmpty()
                 ? evidence.age()
                 : evidence.age(evidence.occurrences().get(0).day());
-        ScoreGrid grid = scores.grid(prior, pack.taper().at(Math.min(earliest, evidence.age())));
+        ScoreGrid grid = scores.grid(prior, pack.taper().at(Math.min(earliest, evidence.age())), mayHaveLightened());
         Population population = new Population(prior, scores, grid, smoking, smokingLevels);
         this.baseline =
                 new Baseline(table, pack.taper(), grid, evidence.age(), population.classes(), population.excess());
@@ -52,6 +54,21 @@ public final class Person {
             excess.add(condition.excess() == null ? null : new ExcessRate(condition.excess(), onset(i)));
         }
         this.aftermath = new Aftermath(baseline, evidence, pack, scores, excess);
+    }
+
+    /** Whether some past occurrence may have left the hazard lower than before. */
+    private boolean mayHaveLightened() {
+        for (Evidence.Occurrence o : evidence.occurrences()) {
+            EventType event = pack.events().get(o.event());
+            AfterEffect effect = event.outcomes().get(o.outcome()).afterEffect();
+            boolean byEffect = effect != null
+                    && effect.hazardRatio() != null
+                    && effect.hazardRatio().value() < 1;
+            if (byEffect || event.bringsOn().stream().anyMatch(b -> scores.leastOf(b.condition()) < 0)) {
+                return true;
+            }
+        }
+        return false;
     }
 
     /** When a condition began, in years from today: by the statement, else by what made it certain; NaN: not dated. */

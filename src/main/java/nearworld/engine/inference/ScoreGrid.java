@@ -10,6 +10,8 @@ package nearworld.engine.inference;
 public final class ScoreGrid {
     static final int POINTS = 10;
     private static final double STEP_TIMES_G = 0.08;
+    /** Where surviving an aftermath speaks for a high score, the factor exp(+c·e^{gB}) is steeper than any exp(−H·e^{gB}). */
+    private static final double FINE_STEP_TIMES_G = 0.03;
     private static final double SMALLEST_G = 0.4;
     /** Every spreading over ten nodes widens a measure by five at most; so many may follow one another. */
     private static final int MARGIN = 10 * (POINTS / 2);
@@ -24,9 +26,10 @@ public final class ScoreGrid {
      * @param lowest lowest score that may occur
      * @param highest highest score that may occur
      * @param steepest the largest g at which the score acts
+     * @param fine whether some occurrence may have lowered the hazard
      */
-    ScoreGrid(double lowest, double highest, double steepest) {
-        this.step = STEP_TIMES_G / Math.max(steepest, SMALLEST_G);
+    ScoreGrid(double lowest, double highest, double steepest, boolean fine) {
+        this.step = (fine ? FINE_STEP_TIMES_G : STEP_TIMES_G) / Math.max(steepest, SMALLEST_G);
         this.originSteps = (int) Math.floor(lowest / step) - MARGIN;
         this.size = (int) Math.ceil(highest / step) + MARGIN + 1 - originSteps;
     }

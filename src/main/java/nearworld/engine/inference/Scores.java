@@ -61,6 +61,15 @@ public final class Scores {
         return conditions[condition];
     }
 
+    /** The least that a condition's coming can add to the score, whatever else is present. */
+    double leastOf(int condition) {
+        double sum = conditions[condition];
+        for (int k = 0; k < interactions.length; k++) {
+            sum += (interactionMembers[k] >> condition & 1) != 0 ? Math.min(0, interactions[k]) : 0;
+        }
+        return sum;
+    }
+
     /** The level's own score. */
     public double level(int behaviour, int level) {
         return levels[behaviour][level];
@@ -134,7 +143,7 @@ public final class Scores {
     }
 
     /** A grid that holds every score that can occur, what treatments add included. */
-    ScoreGrid grid(PopulationPrior prior, double steepest) {
+    ScoreGrid grid(PopulationPrior prior, double steepest, boolean fine) {
         double[] range = {0, 0};
         for (double c : conditions) {
             widen(range, c);
@@ -152,7 +161,7 @@ public final class Scores {
         double[] z = prior.frailty();
         range[0] += StrictMath.log(z[0]);
         range[1] += StrictMath.log(z[z.length - 1]);
-        return new ScoreGrid(range[0], range[1], steepest);
+        return new ScoreGrid(range[0], range[1], steepest, fine);
     }
 
     private static void widen(double[] range, double value) {
