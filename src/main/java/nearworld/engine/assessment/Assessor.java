@@ -220,10 +220,7 @@ public final class Assessor {
         WorldCurve curve = path.startsWith(whatIfs)
                 ? worlds.whatIf(resolver.plan(Integer.parseInt(path.substring(whatIfs.length(), path.indexOf(']')))))
                 : worlds.posteriorWorlds().recorded();
-        Headline own = new Headline(
-                person.baseline().table(),
-                worlds.table().survival(),
-                file.cover());
+        Headline own = new Headline(person.baseline().table(), worlds.table().survival(), file.cover());
         return own.of("variant", curve, Double.NaN, null);
     }
 }

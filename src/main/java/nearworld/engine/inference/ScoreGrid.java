@@ -12,6 +12,7 @@ public final class ScoreGrid {
     private static final double STEP_TIMES_G = 0.08;
     /** Where surviving an aftermath speaks for a high score, the factor exp(+c·e^{gB}) is steeper than any exp(−H·e^{gB}). */
     private static final double FINE_STEP_TIMES_G = 0.03;
+
     private static final double SMALLEST_G = 0.4;
     /** Every spreading over ten nodes widens a measure by five at most; so many may follow one another. */
     private static final int MARGIN = 10 * (POINTS / 2);
