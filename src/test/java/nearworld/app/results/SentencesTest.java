@@ -43,7 +43,7 @@ class SentencesTest {
     void whatIsRevealedAndWhatIsCausedMayPointApart() {
         assertThat(told(15, 16.2, 14.7, Locale.ENGLISH).get(1))
                 .isEqualTo(
-                        "Against the table the expectation of life is: 0.3 years fewer. The history reveals: 1.2 years more; its events caused: 1.5 years fewer.");
+                        "Expectation of life against the table: 0.3 years fewer. The history reveals 1.2 years more; its events caused 1.5 years fewer.");
     }
 
     @Test
