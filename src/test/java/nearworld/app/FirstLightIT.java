@@ -58,7 +58,7 @@ class FirstLightIT {
                         .click();
                 page.getByRole(AriaRole.LINK, new Page.GetByRoleOptions().setName("Assessment 1"))
                         .click();
-                assertThat(page.locator("main").innerText()).isEqualTo(recorded);
+                assertThat(page.locator("main").textContent()).isEqualTo(recorded);
             }
         }
     }
@@ -169,7 +169,7 @@ class FirstLightIT {
                 .click();
         assertThat(page).hasURL(java.util.regex.Pattern.compile(".*/cases/FL-1/assessments/1$"));
         assertThat(page.locator("h1")).hasText("Assessment 1 of case FL-1");
-        String text = page.locator("main").innerText();
+        String text = page.locator("main").textContent();
         assertThat(text).contains("Never happened").contains("What it rests on");
         return text;
     }
