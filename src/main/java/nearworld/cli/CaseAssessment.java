@@ -37,12 +37,21 @@ final class CaseAssessment {
         if (!reading.isAccepted()) {
             return refused(text, reading.located());
         }
-        AssessmentOutcome outcome = assessor.assess(reading.value());
+        AssessmentOutcome outcome = outcome(reading.value());
         if (outcome instanceof AssessmentResult result) {
             return new CaseAnswer(
                     ResultWriter.line(ResultWriter.tree(reading.value().caseRef(), result, basis)), List.of());
         }
         return refused(text, (Refusal) outcome);
+    }
+
+    /** The outer edge: what goes wrong with one case, memory included, must not keep the others from their results. */
+    private AssessmentOutcome outcome(CaseFile file) {
+        try {
+            return assessor.assess(file);
+        } catch (RuntimeException | OutOfMemoryError | StackOverflowError e) {
+            return new Refusal(List.of(Fault.of("calculationFailed", "$", "detail", e)));
+        }
     }
 
     private static CaseAnswer refused(CaseText text, List<LocatedFault> faults) {

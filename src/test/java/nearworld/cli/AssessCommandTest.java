@@ -251,4 +251,20 @@ class AssessCommandTest {
         assertThat(run.out).hasSize(1);
         assertThat(run.err).singleElement().asString().contains("junk.bin: $: tooLarge (bound=1048576)");
     }
+
+    @Test
+    void refusesMoreOccurrencesThanTheCalculationCanHold() throws IOException {
+        StringBuilder occurrences = new StringBuilder();
+        for (int i = 0; i < 61; i++) {
+            occurrences.append(i == 0 ? "" : ",").append("{\"on\": \"" + (1963 + i) + "\", \"outcome\": \"ward\"}");
+        }
+        String text = Files.readString(Path.of(worked(1)))
+                .replace("{\"on\": \"2024-05-10\", \"outcome\": \"ward\"}", occurrences);
+        Path file = Files.writeString(folder.resolve("many.json"), text);
+
+        assertThat(assess("", file.toString()).err)
+                .singleElement()
+                .asString()
+                .contains(": $.history: tooManyOccurrences (bound=60, value=61): ");
+    }
 }

@@ -21,6 +21,9 @@ final class HistoryPart {
     /** An occurrence as a what-if names it. */
     record Named(int event, PartialDate on) {}
 
+    /** The calculation keeps sets of occurrences as bits of one number. */
+    private static final int MOST_OCCURRENCES = 60;
+
     private final PackIndex index;
     private final Dates dates;
     private final FaultList faults;
@@ -48,6 +51,10 @@ final class HistoryPart {
             result.add(new CaseFile.History(event, from, to, list));
         }
         overlaps();
+        int count = result.stream().mapToInt(h -> h.occurrences().size()).sum();
+        if (count > MOST_OCCURRENCES) {
+            faults.add(Fault.of("tooManyOccurrences", history.path(), "value", count, "bound", MOST_OCCURRENCES));
+        }
         return result;
     }
 
