@@ -88,10 +88,10 @@ public final class SparseCases {
                 .append(": {frailtyPower: 0.8, episodeDays: 14, ratePerYear: {male: {40: 0.01, 80: 0.05},")
                 .append(" female: {40: 0.01, 80: 0.05}}, rateRatios: {")
                 .append(String.join(", ", ratios))
-                .append("},\n    bringsOn: {c")
-                .append((first + 1) % conditions)
+                .append("},\n    ")
+                .append(number == 0 ? "bringsOn: {c" + (first + 1) % conditions + ": 0.2}, " : "")
                 .append(
-                        ": 0.2}, outcomes: {ward: {share: {40: 0.9}, afterEffect: {hazardRatio: 1.5, halfLifeYears: 1}},")
+                        "outcomes: {ward: {share: {40: 0.9}, afterEffect: {hazardRatio: 1.5, halfLifeYears: 1}},")
                 .append(" intensive: {share: {40: 0.06}, oddsRatios: {c")
                 .append(first)
                 .append(

@@ -30,19 +30,21 @@ final class ScoreElimination {
     List<Integer> order(TreeSet<Integer> variables) {
         TreeSet<Integer> left = new TreeSet<>(variables);
         TreeSet<Integer> alive = new TreeSet<>();
+        TreeSet<Integer> done = new TreeSet<>();
         List<Integer> order = new ArrayList<>();
         while (!left.isEmpty()) {
             int best = -1;
             double bestSize = Double.POSITIVE_INFINITY;
             for (int v : left) {
-                double size = size(widened(alive, v));
+                double size = size(widened(alive, v, done));
                 if (size < bestSize) {
                     bestSize = size;
                     best = v;
                 }
             }
-            alive = widened(alive, best);
+            alive = widened(alive, best, done);
             alive.remove(best);
+            done.add(best);
             left.remove(best);
             order.add(best);
         }
@@ -52,16 +54,19 @@ final class ScoreElimination {
     /** How many states of the frontier are met in all, in a given order. */
     double cost(List<Integer> order) {
         TreeSet<Integer> alive = new TreeSet<>();
+        TreeSet<Integer> done = new TreeSet<>();
         double cost = 0;
         for (int v : order) {
-            alive = widened(alive, v);
+            alive = widened(alive, v, done);
             cost += size(alive);
             alive.remove(v);
+            done.add(v);
         }
         return cost;
     }
 
-    private TreeSet<Integer> widened(TreeSet<Integer> alive, int variable) {
+    /** The frontier with a variable's neighbours; the factors of those that are done have been multiplied in already. */
+    private TreeSet<Integer> widened(TreeSet<Integer> alive, int variable, TreeSet<Integer> done) {
         TreeSet<Integer> wider = new TreeSet<>(alive);
         wider.add(variable);
         for (List<Factor> some : List.of(factors, scores)) {
@@ -73,7 +78,7 @@ final class ScoreElimination {
                 }
             }
         }
-        // A variable that was summed out has no factor left, so it does not come alive again.
+        wider.removeAll(done);
         return wider;
     }
 

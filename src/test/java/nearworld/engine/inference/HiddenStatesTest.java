@@ -62,7 +62,7 @@ class HiddenStatesTest {
 
     /** The split is really made in one of them: with it the visitor sees the states of the boundary too, not only those asked for. */
     @ParameterizedTest
-    @ValueSource(longs = 6006)
+    @ValueSource(longs = {6001, 6003, 6006})
     void theSplitIsMade(long seed) {
         Person person = person(seed);
         ConditionStates states =
