@@ -21,7 +21,7 @@ class ScoreGridTest {
     private record Atoms(double[] scores, double[] masses, ScoreMeasure measure, ScoreGrid grid) {
         static Atoms of(double steepest) {
             Random random = new Random(SEED);
-            ScoreGrid grid = new ScoreGrid(-4, 5, steepest);
+            ScoreGrid grid = new ScoreGrid(-4, 5, steepest, false);
             ScoreMeasure measure = new ScoreMeasure(grid);
             double[] scores = new double[200];
             double[] masses = new double[200];
