@@ -90,8 +90,7 @@ public final class SparseCases {
                 .append(String.join(", ", ratios))
                 .append("},\n    ")
                 .append(number == 0 ? "bringsOn: {c" + (first + 1) % conditions + ": 0.2}, " : "")
-                .append(
-                        "outcomes: {ward: {share: {40: 0.9}, afterEffect: {hazardRatio: 1.5, halfLifeYears: 1}},")
+                .append("outcomes: {ward: {share: {40: 0.9}, afterEffect: {hazardRatio: 1.5, halfLifeYears: 1}},")
                 .append(" intensive: {share: {40: 0.06}, oddsRatios: {c")
                 .append(first)
                 .append(
