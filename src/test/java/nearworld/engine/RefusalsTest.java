@@ -100,6 +100,21 @@ class RefusalsTest {
     }
 
     @Test
+    void aWhatIfThatUndoesSomethingInALongHistory() {
+        String occurrences = java.util.stream.IntStream.range(0, 13)
+                .mapToObj(y -> "{\"on\": \"" + (2010 + y) + "-03-01\", \"outcome\": \"ward\"}")
+                .collect(java.util.stream.Collectors.joining(","));
+        String history = ", \"history\": [{\"event\": \"respiratoryAdmission\", \"occurrences\": [" + occurrences + "]}],"
+                + " \"whatIfs\": [{\"name\": \"none\", \"changes\": [{\"without\": {\"condition\": \"copd\"}}]}]";
+
+        Fault fault = refusal(TABLE, PACK, CASE.formatted("1966-12-01", history));
+
+        assertThat(fault.code()).isEqualTo("tooManyOccurrences");
+        assertThat(fault.path()).isEqualTo("$.whatIfs[0]");
+        assertThat(fault.values()).containsEntry("occurrences", "13").containsEntry("highest", "12");
+    }
+
+    @Test
     void anEventAfterTheTablesEnd() {
         String late = ", \"whatIfs\": [{\"name\": \"late\", \"changes\": [{\"add\":"
                 + " {\"event\": \"respiratoryAdmission\", \"on\": \"2090-01-01\"}}]}]";

@@ -28,6 +28,10 @@ public final class Assessor {
     public static final String ENGINE_VERSION = "1.0.0";
 
     private static final String SMOKING = "smoking";
+    /** Beyond these, a what-if that undoes something would take minutes: each occurrence doubles the courses of the past. */
+    private static final int MOST_OCCURRENCES_UNDONE = 12;
+
+    private static final int MOST_BRINGING_UNDONE = 8;
 
     private final MortalityTable table;
     private final EvidencePack pack;
@@ -57,6 +61,7 @@ public final class Assessor {
             plans.add(resolver.plan(w));
         }
         List<Fault> late = lateEvents(plans, person);
+        late.addAll(tooIntricate(plans, person));
         if (!late.isEmpty()) {
             return new Refusal(late);
         }
@@ -127,6 +132,34 @@ public final class Assessor {
                 if (a.at() >= end) {
                     faults.add(Fault.of("eventAfterTable", "$.whatIfs[" + w + "]", "years", a.at(), "highest", end));
                 }
+            }
+        }
+        return faults;
+    }
+
+    /** What-ifs that undo something branch over every occurrence, and over every switch of what occurrences bring on. */
+    private static List<Fault> tooIntricate(List<WhatIfPlan> plans, Person person) {
+        int bringing = 0;
+        for (Evidence.Occurrence o : person.evidence().occurrences()) {
+            bringing += person.pack().events().get(o.event()).bringsOn().isEmpty() ? 0 : 1;
+        }
+        List<Fault> faults = new ArrayList<>();
+        int occurrences = person.evidence().occurrences().size();
+        for (int w = 0; w < plans.size(); w++) {
+            boolean differs = bringing > 0
+                    || plans.get(w).never() != 0
+                    || !plans.get(w).always().isEmpty();
+            if (!plans.get(w).undoesNothing()
+                    && differs
+                    && (occurrences > MOST_OCCURRENCES_UNDONE || bringing > MOST_BRINGING_UNDONE)) {
+                faults.add(new Fault(
+                        "tooManyOccurrences",
+                        "$.whatIfs[" + w + "]",
+                        Map.of(
+                                "occurrences", String.valueOf(occurrences),
+                                "highest", String.valueOf(MOST_OCCURRENCES_UNDONE),
+                                "bringing", String.valueOf(bringing),
+                                "highestBringing", String.valueOf(MOST_BRINGING_UNDONE))));
             }
         }
         return faults;

@@ -52,7 +52,7 @@ public record WhatIfPlan(
     public record Added(int event, double at, int outcome) {}
 
     /** True where every recorded occurrence stays as it was or as the plan itself says. */
-    boolean undoesNothing() {
+    public boolean undoesNothing() {
         return removed == 0 && never == 0 && always.isEmpty();
     }
 
