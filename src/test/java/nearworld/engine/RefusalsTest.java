@@ -104,8 +104,9 @@ class RefusalsTest {
         String occurrences = java.util.stream.IntStream.range(0, 13)
                 .mapToObj(y -> "{\"on\": \"" + (2010 + y) + "-03-01\", \"outcome\": \"ward\"}")
                 .collect(java.util.stream.Collectors.joining(","));
-        String history = ", \"history\": [{\"event\": \"respiratoryAdmission\", \"occurrences\": [" + occurrences + "]}],"
-                + " \"whatIfs\": [{\"name\": \"none\", \"changes\": [{\"without\": {\"condition\": \"copd\"}}]}]";
+        String history =
+                ", \"history\": [{\"event\": \"respiratoryAdmission\", \"occurrences\": [" + occurrences + "]}],"
+                        + " \"whatIfs\": [{\"name\": \"none\", \"changes\": [{\"without\": {\"condition\": \"copd\"}}]}]";
 
         Fault fault = refusal(TABLE, PACK, CASE.formatted("1966-12-01", history));
 
