@@ -58,7 +58,7 @@ class FirstLightIT {
                         .click();
                 page.getByRole(AriaRole.LINK, new Page.GetByRoleOptions().setName("Assessment 1"))
                         .click();
-                assertThat(page.locator("main").textContent()).isEqualTo(recorded);
+                assertThat(mainText(page)).isEqualTo(recorded);
             }
         }
     }
@@ -169,9 +169,16 @@ class FirstLightIT {
                 .click();
         assertThat(page).hasURL(java.util.regex.Pattern.compile(".*/cases/FL-1/assessments/1$"));
         assertThat(page.locator("h1")).hasText("Assessment 1 of case FL-1");
-        String text = page.locator("main").textContent();
+        String text = mainText(page);
         assertThat(text).contains("Never happened").contains("What it rests on");
         return text;
+    }
+
+    /** The page's own text once all of it has arrived: its address and heading are there earlier. */
+    private static String mainText(Page page) {
+        page.waitForURL("**/assessments/1");
+        page.waitForLoadState();
+        return page.locator("main").textContent();
     }
 
     private static void save(Page page, String section) {
