@@ -93,11 +93,6 @@ public final class AgeCurve {
         return sum;
     }
 
-    /** The same curve through other values at the same ages. */
-    public AgeCurve withValues(List<Estimate> other) {
-        return new AgeCurve(scale, ages, other);
-    }
-
     public Scale scale() {
         return scale;
     }

@@ -42,11 +42,6 @@ final class Habits {
         this.changes = new java.util.TreeMap<>(changes);
     }
 
-    /** The behaviours whose levels make a difference to come. */
-    java.util.Set<Integer> changing() {
-        return changes.keySet();
-    }
-
     int key(int[] stateOfVariable) {
         int key = 0;
         for (int b : changes.keySet()) {

@@ -10,7 +10,6 @@ import nearworld.engine.basics.Sex;
 import nearworld.engine.network.EvidencePack;
 import nearworld.engine.network.EvidencePack.Behaviour;
 import nearworld.engine.network.EvidencePack.Condition;
-import nearworld.engine.network.EvidencePack.Level;
 import nearworld.engine.network.EvidencePack.Link;
 
 /**
@@ -279,15 +278,5 @@ public final class PopulationPrior {
     double presentAt(int condition, double atAge) {
         return Math.min(
                 1, pack.conditions().get(condition).prevalence().get(sex).at(atAge) / prevalences[condition]);
-    }
-
-    /** The levels' own scores, ln HR / g(atAge). */
-    double levelScore(Level level) {
-        return score(level.hazardRatio().ratio().value(), level.hazardRatio().atAge());
-    }
-
-    /** A ratio that speaks for an age, as a score. */
-    double score(double ratio, double atAge) {
-        return StrictMath.log(ratio) / pack.taper().at(atAge);
     }
 }
